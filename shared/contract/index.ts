@@ -1,0 +1,12 @@
+/** The contract between client and server: schemas, types, permissions, problems and paths. */
+export * from './account';
+export * from './biometry-import';
+export * from './common';
+export * from './decimal-text';
+export * from './lens';
+export * from './measurement';
+export * from './paths';
+export * from './patient';
+export * from './plan';
+export * from './problem';
+export * from './roles';
