@@ -47,7 +47,7 @@ export function lineOf(maxLength: number, name = 'This') {
       .string()
       .trim()
       .max(maxLength, `${name} is longer than ${maxLength} characters`)
-      // eslint-disable-next-line no-control-regex -- control characters are exactly what must be found
+       
       .refine((text) => !/[\u0000-\u001f\u007f-\u009f]/.test(text), `${name} contains control characters`)
   );
 }
@@ -63,7 +63,7 @@ export function textOf(maxLength: number, name = 'This') {
       .string()
       .trim()
       .max(maxLength, `${name} is longer than ${maxLength} characters`)
-      // eslint-disable-next-line no-control-regex -- see above
+       
       .refine(
         (text) => !/[\u0000-\u0008\u000b-\u001f\u007f-\u009f]/.test(text),
         `${name} contains control characters`,
