@@ -49,3 +49,14 @@ export {
 } from './units/corneal-power';
 export { cornealFromSpectacleD, spectacleFromCornealD } from './units/vertex';
 export { axisDifferenceDeg, degFromRad, normaliseAxisDeg, radFromDeg, roundAxisDeg } from './units/angle';
+
+export { planToric } from './toric/plan-toric';
+export type { ToricLens, ToricPlan, ToricQuestion } from './toric/plan-toric';
+export type { SphereCylinder } from './optics/symmetric-matrix';
+
+export { landing, prepareLanding } from './spread/landing';
+export type { Landing, LandingEye, LandingPart, PreparedLanding } from './spread/landing';
+export { defaultSpread, OWN_RESULTS_FROM_CASES, spreadOfOwnResults } from './spread/default-spread';
+export type { AxialLengthMethod, DefaultSpreadOptions } from './spread/default-spread';
+export type { Spread, SpreadInput, SpreadMark, SpreadPart } from './spread/spread';
+export { normalCdf } from './spread/normal';
