@@ -1,0 +1,28 @@
+/**
+ * All writes of the process, one after the other. SQLite has one writer at a time; waiting inside the driver
+ * blocks its few threads, so that even the writer that holds the lock cannot commit. Waiting here costs nothing.
+ */
+import type { Sequelize, Transaction } from 'sequelize';
+
+export interface WriteQueue {
+  inWrite<T>(write: (transaction: Transaction) => Promise<T>): Promise<T>;
+  idle(): Promise<void>;
+}
+
+export function createWriteQueue(sequelize: Sequelize): WriteQueue {
+  let last: Promise<unknown> = Promise.resolve();
+  return {
+    inWrite<T>(write: (transaction: Transaction) => Promise<T>): Promise<T> {
+      const result = last.then(() => sequelize.transaction(write));
+      last = result.catch(() => undefined);
+      return result;
+    },
+    async idle() {
+      let seen: unknown;
+      while (seen !== last) {
+        seen = last;
+        await last;
+      }
+    },
+  };
+}
