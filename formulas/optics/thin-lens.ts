@@ -31,32 +31,41 @@ export interface ThinLensEye {
   notices: Notice[];
 }
 
-/** Spectacle refraction with a lens of this power, D. */
-export function refractionWithLensD(eye: ThinLensEye, powerD: number, vertexMm: number): number {
-  const behindCorneaD = vergenceBehindCorneaD(eye, powerD);
-  return spectacleFromCornealD(behindCorneaD - eye.cornealPowerD, vertexMm);
+/** Both directions of one eye; what does not depend on lens or refraction is worked out once. */
+export interface ThinLens {
+  /** Spectacle refraction with a lens of this power, D. */
+  refractionAt(powerD: number): number;
+  /** Lens power for a spectacle refraction, D. */
+  powerAt(refractionD: number): number;
 }
 
-/** Lens power for a spectacle refraction, D. */
-export function powerForRefractionD(eye: ThinLensEye, refractionD: number, vertexMm: number): number {
-  const behindCorneaD = eye.cornealPowerD + cornealFromSpectacleD(refractionD, vertexMm);
-  const denominator = 1 - (eye.lensPlaneMm / AQUEOUS_MM_D) * behindCorneaD;
-  if (!(denominator > 0)) {
-    throw new OutOfRangeError('elpMm', eye.lensPlaneMm, { min: 0, max: AQUEOUS_MM_D / behindCorneaD });
-  }
-  return AQUEOUS_MM_D / (eye.opticalLengthMm - eye.lensPlaneMm) - behindCorneaD / denominator;
+export function thinLens(eye: ThinLensEye, vertexMm: number): ThinLens {
+  const { cornealPowerD } = eye;
+  /** Vergence that must leave the back of the lens: n/(L-d). */
+  const behindLensD = AQUEOUS_MM_D / (eye.opticalLengthMm - eye.lensPlaneMm);
+  const reducedM = eye.lensPlaneMm / AQUEOUS_MM_D;
+  return {
+    refractionAt: (powerD) => {
+      const beforeLensD = behindLensD - powerD;
+      // v/(1 + t v) is n/(n/v + d) without its false singularity at v = 0.
+      const denominator = 1 + reducedM * beforeLensD;
+      if (!(denominator > 0)) throw beyondPole(powerD, behindLensD + 1 / reducedM);
+      return spectacleFromCornealD(beforeLensD / denominator - cornealPowerD, vertexMm);
+    },
+    powerAt: (refractionD) => {
+      const behindCorneaD = cornealPowerD + cornealFromSpectacleD(refractionD, vertexMm);
+      const denominator = 1 - reducedM * behindCorneaD;
+      if (!(denominator > 0)) {
+        throw new OutOfRangeError('elpMm', eye.lensPlaneMm, { min: 0, max: AQUEOUS_MM_D / behindCorneaD });
+      }
+      return behindLensD - behindCorneaD / denominator;
+    },
+  };
 }
 
-/** Vergence that must leave the back of the cornea so that light focuses on the retina. */
-function vergenceBehindCorneaD(eye: ThinLensEye, powerD: number): number {
-  const beforeLensD = AQUEOUS_MM_D / (eye.opticalLengthMm - eye.lensPlaneMm) - powerD;
-  // Same as n/(n/z + d), without its false singularity at z = 0.
-  const denominator = 1 + (eye.lensPlaneMm / AQUEOUS_MM_D) * beforeLensD;
-  if (!(denominator > 0)) {
-    const poleD = AQUEOUS_MM_D / (eye.opticalLengthMm - eye.lensPlaneMm) + AQUEOUS_MM_D / eye.lensPlaneMm;
-    throw new OutOfRangeError('powerD', powerD, { min: -Number.MAX_VALUE, max: poleD });
-  }
-  return beforeLensD / denominator;
+/** A lens so strong that the focus would fall between cornea and lens. */
+function beyondPole(powerD: number, poleD: number): OutOfRangeError {
+  return new OutOfRangeError('powerD', powerD, { min: -Number.MAX_VALUE, max: poleD });
 }
 
 /** A lens plane in front of the cornea or behind the middle of the eye is no eye: constants and eye do not fit. */

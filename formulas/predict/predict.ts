@@ -2,7 +2,7 @@
  * The two questions of the trade: which refraction will this lens give, and which lens gives this refraction.
  */
 import { checkRange, hardLimits } from '../limits';
-import { powerForRefractionD, refractionWithLensD } from '../optics/thin-lens';
+import { thinLens } from '../optics/thin-lens';
 import { finite } from '../units/number';
 import { checkRequest, opticsOf, vertexOf } from './request';
 import type {
@@ -66,17 +66,17 @@ export function powerForRefraction(
 function prepareRequest(request: FormulaRequest): PreparedEye {
   checkRequest(request);
   const optics = opticsOf(request);
-  const vertexMm = vertexOf(request);
+  const lens = thinLens(optics, vertexOf(request));
   return {
     elpMm: finite('elpMm', optics.elpMm),
     notices: optics.notices,
     refractionAt: (powerD) => {
       checkRange('powerD', powerD, hardLimits.powerD);
-      return finite('refractionD', refractionWithLensD(optics, powerD, vertexMm));
+      return finite('refractionD', lens.refractionAt(powerD));
     },
     powerAt: (targetD) => {
       checkRange('targetD', targetD, hardLimits.targetD);
-      return finite('powerD', powerForRefractionD(optics, targetD, vertexMm));
+      return finite('powerD', lens.powerAt(targetD));
     },
   };
 }

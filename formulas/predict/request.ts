@@ -15,7 +15,7 @@ import { t2 } from '../third-generation/t2';
 import { DEFAULT_VERTEX_MM } from '../units/vertex';
 import type { ThinLensEye } from '../optics/thin-lens';
 import type { FormulaModel } from '../third-generation/formula-eye';
-import type { CorneaRadii, EyeGeometry, FormulaId, FormulaOptions, LensConstants } from '../types';
+import type { EyeGeometry, FormulaId, FormulaOptions, LensConstants } from '../types';
 
 export interface FormulaRequest {
   formula: FormulaId;
@@ -31,7 +31,8 @@ export function checkRequest(request: FormulaRequest): void {
   const { formula, eye, constants, options } = request;
   if (!Object.hasOwn(models, formula)) throw new InvalidOptionError('formula', formula);
   checkRange('axialLengthMm', eye.axialLengthMm, hardLimits.axialLengthMm);
-  checkCornea(eye, '');
+  checkRange('flatRadiusMm', eye.flatRadiusMm, hardLimits.radiusMm);
+  checkRange('steepRadiusMm', eye.steepRadiusMm, hardLimits.radiusMm);
   if (eye.anteriorChamberDepthMm !== undefined) {
     checkRange('anteriorChamberDepthMm', eye.anteriorChamberDepthMm, hardLimits.anteriorChamberDepthMm);
   }
@@ -39,14 +40,12 @@ export function checkRequest(request: FormulaRequest): void {
   checkOptions(options);
 }
 
-function checkCornea(cornea: CorneaRadii, path: string): void {
-  checkRange(`${path}flatRadiusMm`, cornea.flatRadiusMm, hardLimits.radiusMm);
-  checkRange(`${path}steepRadiusMm`, cornea.steepRadiusMm, hardLimits.radiusMm);
-}
-
 function checkOptions(options: FormulaOptions): void {
   if (options.vertexMm !== undefined) checkRange('vertexMm', options.vertexMm, hardLimits.vertexMm);
-  if (options.elpCornea !== undefined) checkCornea(options.elpCornea, 'elpCornea.');
+  if (options.elpCornea !== undefined) {
+    checkRange('elpCornea.flatRadiusMm', options.elpCornea.flatRadiusMm, hardLimits.radiusMm);
+    checkRange('elpCornea.steepRadiusMm', options.elpCornea.steepRadiusMm, hardLimits.radiusMm);
+  }
   const rule = options.srktNegativeRadicand;
   if (rule !== undefined && rule !== 'zero' && rule !== 'absolute') {
     throw new InvalidOptionError('srktNegativeRadicand', rule);

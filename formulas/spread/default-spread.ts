@@ -4,7 +4,7 @@
  * Inputs: method; whether optical biometry had failed in this eye; whether the cornea had refractive surgery.
  * Result: independent parts. At the average eye (AL 23.49 mm, K 44.26 D, ACD 3.10 mm, lens for emmetropia) their
  *   total, as the mean over the five formulas, is the published prediction error:
- *     optical    0.445 D  (SRK/T SD 0.44 D in 888 eyes [V]; An 2019 swept-source MAE 0.36 D * sqrt(pi/2) = 0.45 D [V])
+ *     optical    0.45 D   (SRK/T SD 0.44 D in 888 eyes [V]; An 2019 swept-source MAE 0.36 D * sqrt(pi/2) = 0.45 D [V])
  *     immersion  0.54 D   (MAE 0.43 D * sqrt(pi/2), German randomised trial [V])
  *     contact    0.66 D   (MAE 0.53 D * sqrt(pi/2), same trial [V])
  *     ultrasound where optical failed 0.80 D (MAE 0.64 D * sqrt(pi/2), An 2019: dense cataract [V])
@@ -16,7 +16,7 @@
  *   35:27 from Norrby, J Cataract Refract Surg 2008;34:368-376 [V abstract]; label tolerance see iso-tolerance.ts.
  * Erratum / variant: lens position and refraction share what measurement and label leave of the total, in Norrby's
  *   ratio [D]; the ultrasound axial-length SDs are what the published totals leave [D]. The figure so found for
- *   immersion, 0.135 mm, is close to the 0.126 mm that Norrby's shares imply for the ultrasound era. Errors are taken as independent and normal:
+ *   immersion, 0.133 mm, is close to the 0.126 mm that Norrby's shares imply for the ultrasound era. Errors are taken as independent and normal:
  *   axial-length errors grow with length and are correlated, so this is an approximation. A surgeon's own results are
  *   better once there are 30.
  */
@@ -103,9 +103,9 @@ function depthPart(method: AxialLengthMethod): SpreadPart {
 }
 
 /** Derived, see the docblock: sqrt(total^2 - the other parts^2) over the change per mm at the average eye. */
-const IMMERSION_SD_MM = 0.135;
+const IMMERSION_SD_MM = 0.133;
 const CONTACT_SD_MM = 0.213;
-const DENSE_SD_MM = 0.291;
+const DENSE_SD_MM = 0.29;
 
 const axialLength = { input: 'axialLengthMm' } as const;
 const depth = { source: 'Anterior chamber depth', input: 'anteriorChamberDepthMm' } as const;
@@ -126,12 +126,12 @@ const label: SpreadPart = {
   reference: 'ISO 11979-2 half-width over the square root of 3',
 };
 
-const REMAINDER = 'what measurement and label leave of 0.445 D, shared 35:27 (Norrby 2008)';
+const REMAINDER = 'what measurement and label leave of 0.45 D, shared 35:27 (Norrby 2008)';
 
 const position: SpreadPart = {
   source: 'Where the lens settles',
   input: 'lensPositionMm',
-  sd: 0.224,
+  sd: 0.227,
   mark: 'D',
   reference: REMAINDER,
 };
@@ -139,16 +139,16 @@ const position: SpreadPart = {
 const refraction: SpreadPart = {
   source: 'Refraction after surgery',
   input: 'refractionD',
-  sd: 0.255,
+  sd: 0.258,
   mark: 'D',
   reference: REMAINDER,
 };
 
-/** sqrt(0.71^2 - 0.445^2). */
+/** sqrt(0.71^2 - 0.45^2). */
 const surgery: SpreadPart = {
   source: 'Cornea after refractive surgery',
   input: 'refractionD',
-  sd: 0.553,
+  sd: 0.55,
   mark: 'D',
   reference: 'so that the total is 0.71 D (0.70 to 0.72 D: Wu 2017, BMC Ophthalmol 17:44)',
 };

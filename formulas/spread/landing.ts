@@ -11,13 +11,13 @@
  */
 import { adjustAxialLength } from '../axial-length/wang-koch';
 import { checkRange, hardLimits } from '../limits';
-import { refractionWithLensD } from '../optics/thin-lens';
+import { thinLens } from '../optics/thin-lens';
 import { checkRequest, opticsOf, vertexOf } from '../predict/request';
 import { shiftedCornea } from '../units/corneal-power';
 import { finite } from '../units/number';
 import { labelToleranceSdD } from './iso-tolerance';
 import { normalCdf } from './normal';
-import type { ThinLensEye } from '../optics/thin-lens';
+import type { ThinLens, ThinLensEye } from '../optics/thin-lens';
 import type { FormulaRequest } from '../predict/request';
 import type { EyeGeometry, FormulaId, FormulaOptions, LensConstants, Notice } from '../types';
 import type { Spread, SpreadPart } from './spread';
@@ -59,14 +59,15 @@ export function prepareLanding(question: LandingEye): PreparedLanding {
   checkRequest(request);
   const vertexMm = vertexOf(request);
   const measured = opticsOf(request);
+  const lens = thinLens(measured, vertexMm);
   const parts = question.spread.parts.map((part) => ({
     source: part.source,
-    sdAt: partSd({ request, measured, vertexMm }, part),
+    sdAt: partSd({ request, measured, lens, vertexMm }, part),
   }));
   return {
     at: (powerD) => {
       checkRange('powerD', powerD, hardLimits.powerD);
-      const meanD = finite('refractionD', refractionWithLensD(measured, powerD, vertexMm));
+      const meanD = finite('refractionD', lens.refractionAt(powerD));
       return landingOf(
         meanD,
         parts.map(({ source, sdAt }) => ({ source, sdD: finite('sdD', sdAt(powerD)) })),
@@ -101,29 +102,27 @@ function chanceBetween({ meanD, sdD }: { meanD: number; sdD: number }, fromD: nu
 interface Propagation {
   request: FormulaRequest;
   measured: ThinLensEye;
+  lens: ThinLens;
   vertexMm: number;
 }
 
 /** The part's SD in refraction, as a function of lens power. */
 function partSd(propagation: Propagation, part: SpreadPart): (powerD: number) => number {
-  if (part.sd === 'isoTolerance') return (powerD) => powerSdD(propagation, powerD, labelToleranceSdD(powerD));
+  if (part.sd === 'isoTolerance')
+    return (powerD) => powerSdD(propagation.lens, powerD, labelToleranceSdD(powerD));
   const sd = part.sd;
   checkRange(`spread: ${part.source}`, sd, SD_RANGE);
   if (part.input === 'refractionD') return () => sd;
-  if (part.input === 'lensPowerD') return (powerD) => powerSdD(propagation, powerD, sd);
-  const lower = shiftedOptics(propagation, part, -sd);
-  const upper = shiftedOptics(propagation, part, sd);
-  const { vertexMm } = propagation;
-  return (powerD) =>
-    Math.abs(refractionWithLensD(upper, powerD, vertexMm) - refractionWithLensD(lower, powerD, vertexMm)) / 2;
+  if (part.input === 'lensPowerD') return (powerD) => powerSdD(propagation.lens, powerD, sd);
+  const lower = thinLens(shiftedOptics(propagation, part, -sd), propagation.vertexMm);
+  const upper = thinLens(shiftedOptics(propagation, part, sd), propagation.vertexMm);
+  return (powerD) => Math.abs(upper.refractionAt(powerD) - lower.refractionAt(powerD)) / 2;
 }
 
 const SD_RANGE = { min: 0, max: 10 };
 
-function powerSdD({ measured, vertexMm }: Propagation, powerD: number, sdD: number): number {
-  const lowerD = refractionWithLensD(measured, powerD + sdD, vertexMm);
-  const upperD = refractionWithLensD(measured, powerD - sdD, vertexMm);
-  return Math.abs(upperD - lowerD) / 2;
+function powerSdD(lens: ThinLens, powerD: number, sdD: number): number {
+  return Math.abs(lens.refractionAt(powerD - sdD) - lens.refractionAt(powerD + sdD)) / 2;
 }
 
 /** The formula's eye with one measurement shifted. Shifted values may pass a hard limit; the measured ones do not. */

@@ -8,7 +8,7 @@
  *   dome is at least 7 mm (acts above K 48.21) and its chord at most 13.5 mm (acts beyond 25.326 mm); both come
  *   back as notices.
  * Source: Holladay et al., J Cataract Refract Surg 1988;14:17-24 (existence, surgeon factor and reverse solution [V]
- *   in the abstract; equations [N]: three published powers agree within 0.05 D).
+ *   in the abstract; equations [N]: they give three published powers with a surgeon factor of 1.712 to 1.720).
  * Erratum / variant: the vergence takes the true radius, not the floored one.
  */
 import { constantOf } from '../constants/kinds';
@@ -84,7 +84,7 @@ export const holladay1Facts: FormulaFacts = {
     'Published clamps: radius for the dome at least 7 mm (K above 48.21), chord at most 13.5 mm (AL beyond 25.326 mm).',
   notKnown: [
     'Only the abstract of the paper was read; the equations are recalled and checked by three published powers.',
-    'The surgeon factor behind those three powers is not stated there; 1.733 agrees within 0.05 D, 1.712 to 1.720 exactly.',
+    'The surgeon factor behind those three powers is not stated there: 1.712 to 1.720 gives them exactly, 1.733 (from A 118.9) within 0.1 D.',
   ],
   caution: null,
 };

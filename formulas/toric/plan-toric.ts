@@ -22,7 +22,7 @@ import {
   sphereCylinderFromMatrix,
   steppedBack,
 } from '../optics/symmetric-matrix';
-import { AQUEOUS_MM_D, powerForRefractionD } from '../optics/thin-lens';
+import { AQUEOUS_MM_D, thinLens } from '../optics/thin-lens';
 import { checkRequest, opticsOf, vertexOf } from '../predict/request';
 import { keratometricCylinderD } from '../units/corneal-power';
 import { finite } from '../units/number';
@@ -124,7 +124,7 @@ function lensPlaneCylinder(optics: ThinLensEye, cornealCylinderD: number, vertex
   const halfD = (optics.indexRatio * cornealCylinderD) / 2;
   const flat = { ...optics, cornealPowerD: optics.cornealPowerD - halfD };
   const steep = { ...optics, cornealPowerD: optics.cornealPowerD + halfD };
-  const cylinderD = powerForRefractionD(flat, 0, vertexMm) - powerForRefractionD(steep, 0, vertexMm);
+  const cylinderD = thinLens(flat, vertexMm).powerAt(0) - thinLens(steep, vertexMm).powerAt(0);
   // Below this the quotient of two differences is noise; the limit is exact to its square.
   if (cornealCylinderD < 1e-4) return { cylinderD, ratio: localPlaneRatio(optics) };
   return { cylinderD, ratio: cylinderD / cornealCylinderD };
