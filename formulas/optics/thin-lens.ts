@@ -31,41 +31,47 @@ export interface ThinLensEye {
   notices: Notice[];
 }
 
-/** Both directions of one eye; what does not depend on lens or refraction is worked out once. */
+/** An eye ready to be asked: what depends neither on lens nor on refraction is worked out once. */
 export interface ThinLens {
-  /** Spectacle refraction with a lens of this power, D. */
-  refractionAt(powerD: number): number;
-  /** Lens power for a spectacle refraction, D. */
-  powerAt(refractionD: number): number;
+  cornealPowerD: number;
+  /** Vergence that must leave the back of the lens: n/(L-d). */
+  behindLensD: number;
+  /** d/n, m. */
+  reducedDepthM: number;
+  vertexMm: number;
 }
 
 export function thinLens(eye: ThinLensEye, vertexMm: number): ThinLens {
-  const { cornealPowerD } = eye;
-  /** Vergence that must leave the back of the lens: n/(L-d). */
-  const behindLensD = AQUEOUS_MM_D / (eye.opticalLengthMm - eye.lensPlaneMm);
-  const reducedM = eye.lensPlaneMm / AQUEOUS_MM_D;
   return {
-    refractionAt: (powerD) => {
-      const beforeLensD = behindLensD - powerD;
-      // v/(1 + t v) is n/(n/v + d) without its false singularity at v = 0.
-      const denominator = 1 + reducedM * beforeLensD;
-      if (!(denominator > 0)) throw beyondPole(powerD, behindLensD + 1 / reducedM);
-      return spectacleFromCornealD(beforeLensD / denominator - cornealPowerD, vertexMm);
-    },
-    powerAt: (refractionD) => {
-      const behindCorneaD = cornealPowerD + cornealFromSpectacleD(refractionD, vertexMm);
-      const denominator = 1 - reducedM * behindCorneaD;
-      if (!(denominator > 0)) {
-        throw new OutOfRangeError('elpMm', eye.lensPlaneMm, { min: 0, max: AQUEOUS_MM_D / behindCorneaD });
-      }
-      return behindLensD - behindCorneaD / denominator;
-    },
+    cornealPowerD: eye.cornealPowerD,
+    behindLensD: AQUEOUS_MM_D / (eye.opticalLengthMm - eye.lensPlaneMm),
+    reducedDepthM: eye.lensPlaneMm / AQUEOUS_MM_D,
+    vertexMm,
   };
 }
 
-/** A lens so strong that the focus would fall between cornea and lens. */
-function beyondPole(powerD: number, poleD: number): OutOfRangeError {
-  return new OutOfRangeError('powerD', powerD, { min: -Number.MAX_VALUE, max: poleD });
+/** Spectacle refraction with a lens of this power, D. */
+export function refractionWithPower(lens: ThinLens, powerD: number): number {
+  const beforeLensD = lens.behindLensD - powerD;
+  // v/(1 + t v) is n/(n/v + d) without its false singularity at v = 0.
+  const denominator = 1 + lens.reducedDepthM * beforeLensD;
+  // A lens so strong that the focus would fall between cornea and lens.
+  if (!(denominator > 0)) {
+    const poleD = lens.behindLensD + 1 / lens.reducedDepthM;
+    throw new OutOfRangeError('powerD', powerD, { min: -Number.MAX_VALUE, max: poleD });
+  }
+  return spectacleFromCornealD(beforeLensD / denominator - lens.cornealPowerD, lens.vertexMm);
+}
+
+/** Lens power for a spectacle refraction, D. */
+export function powerWithRefraction(lens: ThinLens, refractionD: number): number {
+  const behindCorneaD = lens.cornealPowerD + cornealFromSpectacleD(refractionD, lens.vertexMm);
+  const denominator = 1 - lens.reducedDepthM * behindCorneaD;
+  if (!(denominator > 0)) {
+    const depthMm = lens.reducedDepthM * AQUEOUS_MM_D;
+    throw new OutOfRangeError('elpMm', depthMm, { min: 0, max: AQUEOUS_MM_D / behindCorneaD });
+  }
+  return lens.behindLensD - behindCorneaD / denominator;
 }
 
 /** A lens plane in front of the cornea or behind the middle of the eye is no eye: constants and eye do not fit. */

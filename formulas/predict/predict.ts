@@ -2,7 +2,7 @@
  * The two questions of the trade: which refraction will this lens give, and which lens gives this refraction.
  */
 import { checkRange, hardLimits } from '../limits';
-import { thinLens } from '../optics/thin-lens';
+import { powerWithRefraction, refractionWithPower, thinLens } from '../optics/thin-lens';
 import { finite } from '../units/number';
 import { checkRequest, opticsOf, vertexOf } from './request';
 import type {
@@ -14,6 +14,7 @@ import type {
   PowerResult,
   RefractionResult,
 } from '../types';
+import type { ThinLens } from '../optics/thin-lens';
 import type { FormulaRequest } from './request';
 
 /** One eye, one formula, one set of constants: the lens position is predicted once, then asked many times. */
@@ -35,7 +36,13 @@ export function prepareFormula(
   constants: LensConstants,
   options: FormulaOptions = {},
 ): PreparedEye {
-  return prepareRequest({ formula, eye, constants, options });
+  const { lens, elpMm, notices } = prepare({ formula, eye, constants, options });
+  return {
+    elpMm,
+    notices,
+    refractionAt: (powerD) => refractionAt(lens, powerD),
+    powerAt: (targetD) => powerAt(lens, targetD),
+  };
 }
 
 /** Predicted spectacle refraction (spherical equivalent), D. */
@@ -46,8 +53,8 @@ export function predictRefraction(
   constants: LensConstants,
   options: FormulaOptions = {},
 ): RefractionResult {
-  const prepared = prepareRequest({ formula, eye, constants, options });
-  return { refractionD: prepared.refractionAt(powerD), elpMm: prepared.elpMm, notices: prepared.notices };
+  const { lens, elpMm, notices } = prepare({ formula, eye, constants, options });
+  return { refractionD: refractionAt(lens, powerD), elpMm, notices };
 }
 
 /** Lens power for a target spectacle refraction, D, not rounded to the steps of any lens. */
@@ -58,25 +65,27 @@ export function powerForRefraction(
   constants: LensConstants,
   options: FormulaOptions = {},
 ): PowerResult {
-  const prepared = prepareRequest({ formula, eye, constants, options });
-  return { powerD: prepared.powerAt(targetD), elpMm: prepared.elpMm, notices: prepared.notices };
+  const { lens, elpMm, notices } = prepare({ formula, eye, constants, options });
+  return { powerD: powerAt(lens, targetD), elpMm, notices };
 }
 /* eslint-enable max-params */
 
-function prepareRequest(request: FormulaRequest): PreparedEye {
+function prepare(request: FormulaRequest): { lens: ThinLens; elpMm: number; notices: Notice[] } {
   checkRequest(request);
   const optics = opticsOf(request);
-  const lens = thinLens(optics, vertexOf(request));
   return {
+    lens: thinLens(optics, vertexOf(request)),
     elpMm: finite('elpMm', optics.elpMm),
     notices: optics.notices,
-    refractionAt: (powerD) => {
-      checkRange('powerD', powerD, hardLimits.powerD);
-      return finite('refractionD', lens.refractionAt(powerD));
-    },
-    powerAt: (targetD) => {
-      checkRange('targetD', targetD, hardLimits.targetD);
-      return finite('powerD', lens.powerAt(targetD));
-    },
   };
+}
+
+function refractionAt(lens: ThinLens, powerD: number): number {
+  checkRange('powerD', powerD, hardLimits.powerD);
+  return finite('refractionD', refractionWithPower(lens, powerD));
+}
+
+function powerAt(lens: ThinLens, targetD: number): number {
+  checkRange('targetD', targetD, hardLimits.targetD);
+  return finite('powerD', powerWithRefraction(lens, targetD));
 }

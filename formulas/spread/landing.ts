@@ -11,7 +11,7 @@
  */
 import { adjustAxialLength } from '../axial-length/wang-koch';
 import { checkRange, hardLimits } from '../limits';
-import { thinLens } from '../optics/thin-lens';
+import { refractionWithPower, thinLens } from '../optics/thin-lens';
 import { checkRequest, opticsOf, vertexOf } from '../predict/request';
 import { shiftedCornea } from '../units/corneal-power';
 import { finite } from '../units/number';
@@ -67,7 +67,7 @@ export function prepareLanding(question: LandingEye): PreparedLanding {
   return {
     at: (powerD) => {
       checkRange('powerD', powerD, hardLimits.powerD);
-      const meanD = finite('refractionD', lens.refractionAt(powerD));
+      const meanD = finite('refractionD', refractionWithPower(lens, powerD));
       return landingOf(
         meanD,
         parts.map(({ source, sdAt }) => ({ source, sdD: finite('sdD', sdAt(powerD)) })),
@@ -116,13 +116,13 @@ function partSd(propagation: Propagation, part: SpreadPart): (powerD: number) =>
   if (part.input === 'lensPowerD') return (powerD) => powerSdD(propagation.lens, powerD, sd);
   const lower = thinLens(shiftedOptics(propagation, part, -sd), propagation.vertexMm);
   const upper = thinLens(shiftedOptics(propagation, part, sd), propagation.vertexMm);
-  return (powerD) => Math.abs(upper.refractionAt(powerD) - lower.refractionAt(powerD)) / 2;
+  return (powerD) => Math.abs(refractionWithPower(upper, powerD) - refractionWithPower(lower, powerD)) / 2;
 }
 
 const SD_RANGE = { min: 0, max: 10 };
 
 function powerSdD(lens: ThinLens, powerD: number, sdD: number): number {
-  return Math.abs(lens.refractionAt(powerD - sdD) - lens.refractionAt(powerD + sdD)) / 2;
+  return Math.abs(refractionWithPower(lens, powerD - sdD) - refractionWithPower(lens, powerD + sdD)) / 2;
 }
 
 /** The formula's eye with one measurement shifted. Shifted values may pass a hard limit; the measured ones do not. */

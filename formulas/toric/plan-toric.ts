@@ -22,7 +22,7 @@ import {
   sphereCylinderFromMatrix,
   steppedBack,
 } from '../optics/symmetric-matrix';
-import { AQUEOUS_MM_D, thinLens } from '../optics/thin-lens';
+import { AQUEOUS_MM_D, powerWithRefraction, thinLens } from '../optics/thin-lens';
 import { checkRequest, opticsOf, vertexOf } from '../predict/request';
 import { keratometricCylinderD } from '../units/corneal-power';
 import { finite } from '../units/number';
@@ -124,7 +124,8 @@ function lensPlaneCylinder(optics: ThinLensEye, cornealCylinderD: number, vertex
   const halfD = (optics.indexRatio * cornealCylinderD) / 2;
   const flat = { ...optics, cornealPowerD: optics.cornealPowerD - halfD };
   const steep = { ...optics, cornealPowerD: optics.cornealPowerD + halfD };
-  const cylinderD = thinLens(flat, vertexMm).powerAt(0) - thinLens(steep, vertexMm).powerAt(0);
+  const cylinderD =
+    powerWithRefraction(thinLens(flat, vertexMm), 0) - powerWithRefraction(thinLens(steep, vertexMm), 0);
   // Below this the quotient of two differences is noise; the limit is exact to its square.
   if (cornealCylinderD < 1e-4) return { cylinderD, ratio: localPlaneRatio(optics) };
   return { cylinderD, ratio: cylinderD / cornealCylinderD };
