@@ -4,6 +4,9 @@
  */
 import type { Sequelize, Transaction } from 'sequelize';
 
+/** For services, which know no Sequelize but hand the transaction on. */
+export type { Transaction };
+
 export interface WriteQueue {
   inWrite<T>(write: (transaction: Transaction) => Promise<T>): Promise<T>;
   idle(): Promise<void>;

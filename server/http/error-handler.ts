@@ -1,0 +1,64 @@
+/** Every error of every request ends here, as a problem document. */
+import type { ErrorRequestHandler, RequestHandler, Response } from 'express';
+import type { Logger } from 'pino';
+import type { ProblemCode } from '@/shared/contract';
+import { requestIdOf } from '@/server/http/request-id';
+import { ProblemError } from '@/server/http/problem';
+
+export const unknownPath: RequestHandler = () => {
+  throw new ProblemError('not-found');
+};
+
+export function errorHandler(logger: Logger): ErrorRequestHandler {
+  // Express knows an error handler by its four parameters.
+  // eslint-disable-next-line max-params
+  return (error: unknown, _request, response, next) => {
+    // Too late for another answer: Express then closes the connection.
+    if (response.headersSent) return next(error);
+    const problem = asProblem(error);
+    if (problem.code === 'internal') logger.error({ requestId: requestIdOf(response), err: error }, 'failed');
+    sendProblem(response, problem);
+  };
+}
+
+export function sendProblem(response: Response, problem: ProblemError): void {
+  const document = problem.toProblem(requestIdOf(response));
+  const { retryAfterS } = problem.extras;
+  if (retryAfterS !== undefined) response.setHeader('Retry-After', String(retryAfterS));
+  if (document.status === 401) response.setHeader('WWW-Authenticate', 'Bearer');
+  response.status(document.status).type('application/problem+json').send(JSON.stringify(document));
+}
+
+function asProblem(error: unknown): ProblemError {
+  if (error instanceof ProblemError) return error;
+  const { name, code, status } = describe(error);
+  if (name === 'MulterError') return fromUpload(code);
+  const fromStore = STORE_ERRORS[name];
+  if (fromStore) return new ProblemError(fromStore);
+  return new ProblemError((status === undefined ? undefined : CLIENT_ERRORS[status]) ?? 'internal');
+}
+
+/** Last line of defence; services check first and say what is wrong. */
+const STORE_ERRORS: Record<string, ProblemCode> = {
+  SequelizeUniqueConstraintError: 'conflict',
+  SequelizeForeignKeyConstraintError: 'conflict',
+  SequelizeOptimisticLockError: 'changed-meanwhile',
+};
+
+/** Errors of Express and its body parsers, by the status that they carry. */
+const CLIENT_ERRORS: Record<number, ProblemCode> = {
+  400: 'bad-request',
+  404: 'not-found',
+  413: 'too-large',
+  415: 'unsupported-type',
+};
+
+function fromUpload(code: unknown): ProblemError {
+  return code === 'LIMIT_FILE_SIZE' ? new ProblemError('too-large') : new ProblemError('bad-request');
+}
+
+function describe(error: unknown): { name: string; code?: unknown; status?: number } {
+  if (!(error instanceof Error)) return { name: '' };
+  const { code, status } = error as Error & { code?: unknown; status?: unknown };
+  return { name: error.name, code, status: typeof status === 'number' ? status : undefined };
+}

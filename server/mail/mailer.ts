@@ -1,0 +1,32 @@
+/** Sends mail by SMTP: to the practice's own service, or to the local fake that keeps it in the outbox. */
+import { createTransport } from 'nodemailer';
+
+export interface Mail {
+  to: string;
+  subject: string;
+  text: string;
+}
+
+export interface Mailer {
+  send(mail: Mail): Promise<void>;
+  close(): Promise<void>;
+}
+
+const FROM = 'Landfall <no-reply@landfall.example>';
+
+export function createMailer(smtpUrl: string, onClose: () => Promise<void> = async () => undefined): Mailer {
+  const transport = createTransport(smtpUrl, {
+    from: FROM,
+    // One plain encoding for every text, so that what arrives can be read back exactly.
+    textEncoding: 'base64',
+    disableFileAccess: true,
+    disableUrlAccess: true,
+  });
+  return {
+    send: async ({ to, subject, text }) => void (await transport.sendMail({ to, subject, text })),
+    close: async () => {
+      transport.close();
+      await onClose();
+    },
+  };
+}
