@@ -14,6 +14,7 @@ import {
 } from './common';
 
 export const SEXES = ['female', 'male', 'other', 'unknown'] as const;
+export const RECORD_NUMBER_MAX_LENGTH = 40;
 export const NAME_MAX_LENGTH = 100;
 export const OLDEST_BIRTH_DATE = '1900-01-01';
 
@@ -23,7 +24,7 @@ export function isPlausibleBirthDate(birthDate: string, today: string): boolean 
 }
 
 export const patientInputSchema = z.object({
-  recordNumber: requiredLineOf(40, 'Record number'),
+  recordNumber: requiredLineOf(RECORD_NUMBER_MAX_LENGTH, 'Record number'),
   familyName: requiredLineOf(NAME_MAX_LENGTH, 'Family name'),
   givenName: requiredLineOf(NAME_MAX_LENGTH, 'Given name'),
   birthDate: isoDateSchema.refine(
