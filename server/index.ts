@@ -1,6 +1,7 @@
 /** The process: settings, start, what the console says, signals. */
 import { readConfig } from '@/server/config';
 import { createLogger } from '@/server/http/logging';
+import { makeFirstAdministratorCode } from '@/server/features/practice/first-administrator.service';
 import { describePractice } from '@/server/features/practice/practice.service';
 import { startServer, type RunningServer } from '@/server/start';
 
@@ -28,9 +29,16 @@ async function main(): Promise<void> {
 
 async function announce({ deps, port }: RunningServer): Promise<void> {
   const { demoAccounts } = await describePractice();
+  const code = await makeFirstAdministratorCode(deps);
   const lines = [`Landfall is at ${deps.config.origin} (port ${port})`];
   if (demoAccounts.length > 0) lines.push('', 'Demo accounts (invented people, e-mail and password):');
   for (const { email, password } of demoAccounts) lines.push(`  ${email.padEnd(34)}${password}`);
+  if (code)
+    lines.push(
+      '',
+      'There is no account yet. Open the address and make the administrator with this code:',
+      `  ${code}`,
+    );
   console.log(`\n${lines.join('\n')}\n`);
 }
 

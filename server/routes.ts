@@ -1,8 +1,20 @@
 /** Every route of the API. A feature that is not named here does not exist. */
+import { auditRoutes } from '@/server/audit/audit.routes';
 import type { Deps } from '@/server/deps';
+import { accountRoutes } from '@/server/features/accounts/account.routes';
+import { authRoutes } from '@/server/features/auth/auth.routes';
+import { homeRoutes } from '@/server/features/home/home.routes';
+import { outboxRoutes } from '@/server/features/outbox/outbox.routes';
 import { practiceRoutes } from '@/server/features/practice/practice.routes';
 import type { Route } from '@/server/http/route';
 
-export function allRoutes(_deps: Deps): Route[] {
-  return [...practiceRoutes()];
+export function allRoutes(deps: Deps): Route[] {
+  return [
+    ...practiceRoutes(deps),
+    ...authRoutes(deps),
+    ...homeRoutes(),
+    ...accountRoutes(deps),
+    ...outboxRoutes(),
+    ...auditRoutes(),
+  ];
 }

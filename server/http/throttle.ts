@@ -12,8 +12,8 @@ interface Attempts {
 }
 
 export interface Throttle {
-  /** Counts one attempt; throws 429 when there were too many. */
-  attempt(key: string): void;
+  /** Counts one attempt and says how many are left; throws 429 when none was. */
+  attempt(key: string): number;
   /** The attempt succeeded: forget the failures before it. */
   reset(key: string): void;
 }
@@ -31,6 +31,7 @@ export function createThrottle(clock: Clock): Throttle {
         throw new ProblemError('too-many-requests', undefined, { retryAfterS });
       }
       attempts.set(key, { ...entry, count: entry.count + 1 });
+      return ATTEMPTS_PER_WINDOW - entry.count - 1;
     },
     reset(key) {
       attempts.delete(key);

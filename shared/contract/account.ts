@@ -2,7 +2,15 @@
  * Accounts, sign-in, invitations and the first administrator.
  */
 import { z } from 'zod';
-import { idSchema, isoInstantSchema, requiredLineOf, textOf, versionSchema } from './common';
+import {
+  idSchema,
+  isoInstantSchema,
+  pageOf,
+  pageQuerySchema,
+  requiredLineOf,
+  textOf,
+  versionSchema,
+} from './common';
 import { roleSchema } from './roles';
 
 export const emailSchema = z
@@ -32,6 +40,7 @@ export const accountSchema = z.object({
   version: versionSchema,
 });
 export type Account = z.infer<typeof accountSchema>;
+export const accountPageSchema = pageOf(accountSchema);
 
 /** The signed-in person, as the client keeps it. */
 export const sessionUserSchema = accountSchema.pick({
@@ -108,6 +117,7 @@ export const outboxMailSchema = z.object({
   sentAt: isoInstantSchema,
 });
 export type OutboxMail = z.infer<typeof outboxMailSchema>;
+export const outboxPageSchema = pageOf(outboxMailSchema);
 
 export const auditEntrySchema = z.object({
   id: z.number().int(),
@@ -124,3 +134,11 @@ export const auditEntrySchema = z.object({
   detail: z.record(z.string(), z.unknown()),
 });
 export type AuditEntry = z.infer<typeof auditEntrySchema>;
+export const auditPageSchema = pageOf(auditEntrySchema);
+export const auditQuerySchema = pageQuerySchema.extend({
+  noun: z.string().max(40).optional(),
+  nounId: z.string().max(60).optional(),
+  patientId: idSchema.optional(),
+  actorId: idSchema.optional(),
+});
+export type AuditQuery = z.infer<typeof auditQuerySchema>;

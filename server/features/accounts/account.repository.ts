@@ -60,6 +60,11 @@ export async function listOtherActive(id: string, transaction: Transaction): Pro
   return rows.map(toAccount);
 }
 
+export async function listInvited(): Promise<StoredAccount[]> {
+  const rows = await AccountModel.findAll({ where: { status: 'invited' }, order: ['displayName', 'id'] });
+  return rows.map(toAccount);
+}
+
 export type AccountChange = Partial<
   Pick<StoredAccount, 'displayName' | 'roles' | 'status' | 'passwordHash' | 'lastSignInAt'>
 >;

@@ -1,16 +1,16 @@
 /** The life of a sign-in: who it belongs to, when it was last used, how its refresh token turns over. */
 import { createHash } from 'node:crypto';
-import type { Actor } from '@/server/act';
+import type { Actor, AnyAct } from '@/server/act';
 import type { Transaction } from '@/server/db/write-queue';
 import type { Deps } from '@/server/deps';
 import type { TokenSubject } from '@/server/http/access-token';
-import { ProblemError } from '@/server/http/problem';
 import {
   addRefreshToken,
   findLiveSession,
   findRefreshToken,
   forgetExpired,
   markRotated,
+  revokeAllOf,
   revokeFamily,
   touchFamily,
   type RefreshToken,
@@ -111,21 +111,23 @@ async function issue(
   return { refreshToken, familyId, accountId };
 }
 
-/** Ends the sign-in that a refresh token belongs to; null when it belongs to none. */
+/** Ends the sign-in that a refresh token belongs to; null when it belongs to none that stands. */
 export async function endFamilyOf(
-  deps: Deps,
   presented: string,
-  transaction: Transaction,
-): Promise<{ accountId: string } | null> {
-  const token = await findRefreshToken(digestOf(presented), transaction);
+  act: AnyAct,
+): Promise<{ accountId: string; familyId: string } | null> {
+  const token = await findRefreshToken(digestOf(presented), act.transaction);
   if (!token || token.revokedAt !== null) return null;
-  await revokeFamily(token.familyId, deps.clock.now().toISOString(), transaction);
-  return { accountId: token.accountId };
+  await revokeFamily(token.familyId, act.at, act.transaction);
+  return { accountId: token.accountId, familyId: token.familyId };
+}
+
+/** After a change of password or roles, or when the account is disabled. */
+export async function endAllSessionsOf(act: AnyAct, accountId: string): Promise<void> {
+  await revokeAllOf(accountId, act.at, act.transaction);
 }
 
 /** Tokens are random and long: a plain digest is enough, and can be looked up. */
 export function digestOf(token: string): string {
   return createHash('sha256').update(token).digest('hex');
 }
-
-export const sessionEnded = (): ProblemError => new ProblemError('unauthenticated', 'The sign-in has ended');
