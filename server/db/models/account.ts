@@ -34,7 +34,7 @@ export function initAccount(sequelize: Sequelize): void {
       status: DataTypes.TEXT,
       passwordHash: DataTypes.TEXT,
       lastSignInAt: DataTypes.TEXT,
-      version: DataTypes.INTEGER,
+      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
     },

@@ -34,7 +34,7 @@ export function initEye(sequelize: Sequelize): void {
       lensStatus: DataTypes.TEXT,
       vitreousStatus: DataTypes.TEXT,
       remarks: { type: DataTypes.TEXT, defaultValue: '' },
-      version: DataTypes.INTEGER,
+      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
     },

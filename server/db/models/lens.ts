@@ -37,7 +37,7 @@ export function initLens(sequelize: Sequelize): void {
       remarks: { type: DataTypes.TEXT, defaultValue: '' },
       isRetired: { type: DataTypes.BOOLEAN, defaultValue: false },
       isDemo: { type: DataTypes.BOOLEAN, defaultValue: false },
-      version: DataTypes.INTEGER,
+      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
     },

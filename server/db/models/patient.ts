@@ -37,7 +37,7 @@ export function initPatient(sequelize: Sequelize): void {
       sex: DataTypes.TEXT,
       searchKey: DataTypes.TEXT,
       isDemo: { type: DataTypes.BOOLEAN, defaultValue: false },
-      version: DataTypes.INTEGER,
+      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
     },

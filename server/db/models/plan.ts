@@ -45,7 +45,7 @@ export function initPlan(sequelize: Sequelize): void {
       snapshot: DataTypes.TEXT,
       digest: DataTypes.TEXT,
       replacedById: DataTypes.TEXT,
-      version: DataTypes.INTEGER,
+      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
     },
     { sequelize, modelName: 'plan', tableName: 'plans', version: true },
   );
