@@ -7,6 +7,7 @@ import {
   type Sequelize,
 } from 'sequelize';
 import type { Account, Role } from '@/shared/contract';
+import { nullable, versionColumn } from './columns';
 
 export class AccountModel extends Model<
   InferAttributes<AccountModel>,
@@ -32,9 +33,9 @@ export function initAccount(sequelize: Sequelize): void {
       displayName: DataTypes.TEXT,
       roles: DataTypes.JSON,
       status: DataTypes.TEXT,
-      passwordHash: DataTypes.TEXT,
-      lastSignInAt: DataTypes.TEXT,
-      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
+      passwordHash: nullable(DataTypes.TEXT),
+      lastSignInAt: nullable(DataTypes.TEXT),
+      version: versionColumn,
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
     },

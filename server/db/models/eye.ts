@@ -7,6 +7,7 @@ import {
   type Sequelize,
 } from 'sequelize';
 import type { EyeHistory, Side } from '@/shared/contract';
+import { nullable, versionColumn } from './columns';
 
 /** One eye with its history; null means that nobody has answered yet. */
 export class EyeModel extends Model<InferAttributes<EyeModel>, InferCreationAttributes<EyeModel>> {
@@ -29,12 +30,12 @@ export function initEye(sequelize: Sequelize): void {
       id: { type: DataTypes.TEXT, primaryKey: true },
       patientId: DataTypes.TEXT,
       side: DataTypes.TEXT,
-      cornealSurgery: DataTypes.TEXT,
-      cornealSurgeryKind: DataTypes.TEXT,
-      lensStatus: DataTypes.TEXT,
-      vitreousStatus: DataTypes.TEXT,
+      cornealSurgery: nullable(DataTypes.TEXT),
+      cornealSurgeryKind: nullable(DataTypes.TEXT),
+      lensStatus: nullable(DataTypes.TEXT),
+      vitreousStatus: nullable(DataTypes.TEXT),
       remarks: { type: DataTypes.TEXT, defaultValue: '' },
-      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
+      version: versionColumn,
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
     },

@@ -6,6 +6,7 @@ import {
   type InferCreationAttributes,
   type Sequelize,
 } from 'sequelize';
+import { nullable } from './columns';
 
 /** Who settled a flag and why. Rows are only ever added. */
 export class FlagSettlementModel extends Model<
@@ -27,7 +28,7 @@ export function initFlagSettlement(sequelize: Sequelize): void {
     {
       id: { type: DataTypes.TEXT, primaryKey: true },
       eyeId: DataTypes.TEXT,
-      measurementId: DataTypes.TEXT,
+      measurementId: nullable(DataTypes.TEXT),
       ruleId: DataTypes.TEXT,
       reason: DataTypes.TEXT,
       settledBy: DataTypes.TEXT,

@@ -7,6 +7,7 @@ import {
   type Sequelize,
 } from 'sequelize';
 import type { BiometryImport } from '@/shared/contract';
+import { nullable } from './columns';
 
 /** An uploaded file, kept byte for byte, and what became of it. */
 export class ImportModel extends Model<InferAttributes<ImportModel>, InferCreationAttributes<ImportModel>> {
@@ -37,12 +38,12 @@ export function initImport(sequelize: Sequelize): void {
       status: DataTypes.TEXT,
       uploadedBy: DataTypes.TEXT,
       uploadedAt: DataTypes.TEXT,
-      storedBy: DataTypes.TEXT,
-      storedAt: DataTypes.TEXT,
+      storedBy: nullable(DataTypes.TEXT),
+      storedAt: nullable(DataTypes.TEXT),
       readAs: { type: DataTypes.TEXT, defaultValue: '' },
       counts: DataTypes.JSON,
       problems: DataTypes.JSON,
-      sameFileAs: DataTypes.TEXT,
+      sameFileAs: nullable(DataTypes.TEXT),
     },
     { sequelize, modelName: 'import', tableName: 'imports' },
   );

@@ -7,6 +7,7 @@ import {
   type Sequelize,
 } from 'sequelize';
 import type { LensConstant } from '@/shared/contract';
+import { nullable } from './columns';
 
 /** Constants of a lens for one formula and origin. A change closes the old row and adds a new one. */
 export class LensConstantModel extends Model<
@@ -37,7 +38,7 @@ export function initLensConstant(sequelize: Sequelize): void {
       dated: DataTypes.TEXT,
       recordedAt: DataTypes.TEXT,
       recordedBy: DataTypes.TEXT,
-      replacedAt: DataTypes.TEXT,
+      replacedAt: nullable(DataTypes.TEXT),
     },
     { sequelize, modelName: 'lensConstant', tableName: 'lens_constants' },
   );

@@ -7,6 +7,7 @@ import {
   type Sequelize,
 } from 'sequelize';
 import type { Lens } from '@/shared/contract';
+import { versionColumn } from './columns';
 
 export class LensModel extends Model<InferAttributes<LensModel>, InferCreationAttributes<LensModel>> {
   declare id: string;
@@ -37,7 +38,7 @@ export function initLens(sequelize: Sequelize): void {
       remarks: { type: DataTypes.TEXT, defaultValue: '' },
       isRetired: { type: DataTypes.BOOLEAN, defaultValue: false },
       isDemo: { type: DataTypes.BOOLEAN, defaultValue: false },
-      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
+      version: versionColumn,
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
     },

@@ -7,6 +7,7 @@ import {
   type Sequelize,
 } from 'sequelize';
 import type { MeasurementValues } from '@/shared/contract';
+import { nullable } from './columns';
 
 /** One biometry of one eye. The database refuses any change but the one mark that it is superseded. */
 export class MeasurementModel extends Model<
@@ -73,13 +74,13 @@ export function initMeasurement(sequelize: Sequelize): void {
       operator: DataTypes.TEXT,
       remarks: DataTypes.TEXT,
       contentHash: DataTypes.TEXT,
-      importId: DataTypes.TEXT,
-      importRow: DataTypes.INTEGER,
-      raw: DataTypes.JSON,
+      importId: nullable(DataTypes.TEXT),
+      importRow: nullable(DataTypes.INTEGER),
+      raw: nullable(DataTypes.JSON),
       createdBy: DataTypes.TEXT,
       createdAt: DataTypes.TEXT,
-      supersededById: DataTypes.TEXT,
-      supersededReason: DataTypes.TEXT,
+      supersededById: nullable(DataTypes.TEXT),
+      supersededReason: nullable(DataTypes.TEXT),
     },
     { sequelize, modelName: 'measurement', tableName: 'measurements' },
   );

@@ -6,6 +6,7 @@ import {
   type InferCreationAttributes,
   type Sequelize,
 } from 'sequelize';
+import { nullable } from './columns';
 
 /** A link by which somebody sets a password. Only the digest of its token is kept. */
 export class PasswordLinkModel extends Model<
@@ -28,7 +29,7 @@ export function initPasswordLink(sequelize: Sequelize): void {
       accountId: DataTypes.TEXT,
       tokenHash: DataTypes.TEXT,
       expiresAt: DataTypes.TEXT,
-      usedAt: DataTypes.TEXT,
+      usedAt: nullable(DataTypes.TEXT),
     },
     { sequelize, modelName: 'passwordLink', tableName: 'password_links' },
   );

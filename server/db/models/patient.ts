@@ -7,6 +7,7 @@ import {
   type Sequelize,
 } from 'sequelize';
 import type { Patient } from '@/shared/contract';
+import { versionColumn } from './columns';
 
 export class PatientModel extends Model<
   InferAttributes<PatientModel>,
@@ -37,7 +38,7 @@ export function initPatient(sequelize: Sequelize): void {
       sex: DataTypes.TEXT,
       searchKey: DataTypes.TEXT,
       isDemo: { type: DataTypes.BOOLEAN, defaultValue: false },
-      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
+      version: versionColumn,
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
     },

@@ -7,6 +7,7 @@ import {
   type Sequelize,
 } from 'sequelize';
 import type { Plan, PlanChoice, PlanInput } from '@/shared/contract';
+import { nullable, versionColumn } from './columns';
 
 /** A plan of one eye. Once signed, the database refuses any change but "replaced by". */
 export class PlanModel extends Model<InferAttributes<PlanModel>, InferCreationAttributes<PlanModel>> {
@@ -36,16 +37,16 @@ export function initPlan(sequelize: Sequelize): void {
       sequence: DataTypes.INTEGER,
       status: DataTypes.TEXT,
       input: DataTypes.JSON,
-      choice: DataTypes.JSON,
+      choice: nullable(DataTypes.JSON),
       createdBy: DataTypes.TEXT,
       createdAt: DataTypes.TEXT,
       updatedAt: DataTypes.TEXT,
-      signedBy: DataTypes.TEXT,
-      signedAt: DataTypes.TEXT,
-      snapshot: DataTypes.TEXT,
-      digest: DataTypes.TEXT,
-      replacedById: DataTypes.TEXT,
-      version: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
+      signedBy: nullable(DataTypes.TEXT),
+      signedAt: nullable(DataTypes.TEXT),
+      snapshot: nullable(DataTypes.TEXT),
+      digest: nullable(DataTypes.TEXT),
+      replacedById: nullable(DataTypes.TEXT),
+      version: versionColumn,
     },
     { sequelize, modelName: 'plan', tableName: 'plans', version: true },
   );

@@ -6,6 +6,7 @@ import {
   type InferCreationAttributes,
   type Sequelize,
 } from 'sequelize';
+import { nullable } from './columns';
 
 /** One refresh token. All tokens that descend from one sign-in share the family. */
 export class RefreshSessionModel extends Model<
@@ -33,9 +34,9 @@ export function initRefreshSession(sequelize: Sequelize): void {
       tokenHash: DataTypes.TEXT,
       createdAt: DataTypes.TEXT,
       lastUsedAt: DataTypes.TEXT,
-      rotatedAt: DataTypes.TEXT,
+      rotatedAt: nullable(DataTypes.TEXT),
       expiresAt: DataTypes.TEXT,
-      revokedAt: DataTypes.TEXT,
+      revokedAt: nullable(DataTypes.TEXT),
     },
     { sequelize, modelName: 'refreshSession', tableName: 'refresh_sessions' },
   );
