@@ -33,17 +33,19 @@ function asProblem(error: unknown): ProblemError {
   if (error instanceof ProblemError) return error;
   const { name, code, status } = describe(error);
   if (name === 'MulterError') return fromUpload(code);
-  const fromStore = STORE_ERRORS[name];
-  if (fromStore) return new ProblemError(fromStore);
+  if (isTaken(error)) return new ProblemError('conflict');
+  if (name === 'SequelizeOptimisticLockError') return new ProblemError('changed-meanwhile');
   return new ProblemError((status === undefined ? undefined : CLIENT_ERRORS[status]) ?? 'internal');
 }
 
-/** Last line of defence; services check first and say what is wrong. */
-const STORE_ERRORS: Record<string, ProblemCode> = {
-  SequelizeUniqueConstraintError: 'conflict',
-  SequelizeForeignKeyConstraintError: 'conflict',
-  SequelizeOptimisticLockError: 'changed-meanwhile',
-};
+/**
+ * Last line of defence; services look first and say what is taken. Sequelize calls every refusal of SQLite a unique
+ * constraint, also that of a trigger or a check, which would be our own mistake: only the driver's text tells.
+ */
+function isTaken(error: unknown): boolean {
+  const parent = error instanceof Error && 'parent' in error ? error.parent : undefined;
+  return parent instanceof Error && parent.message.includes('UNIQUE constraint failed');
+}
 
 /** Errors of Express and its body parsers, by the status that they carry. */
 const CLIENT_ERRORS: Record<number, ProblemCode> = {

@@ -55,11 +55,12 @@ export function requestLog(logger: Logger): RequestHandler {
 function describeError(error: unknown, isProduction: boolean) {
   if (!(error instanceof Error)) return { name: typeof error };
   const frames = error.stack?.split('\n').filter((line) => line.startsWith('    at ')) ?? [];
-  const { code } = error as { code?: unknown };
+  // Errors of the database carry the driver's own, more telling one as their parent.
+  const { code, parent } = error as { code?: unknown; parent?: unknown };
   return {
     name: error.name,
     code: typeof code === 'string' ? code : undefined,
-    ...(isProduction ? {} : { message: error.message }),
+    ...(isProduction ? {} : { message: parent instanceof Error ? parent.message : error.message }),
     stack: frames.join('\n'),
   };
 }

@@ -58,7 +58,11 @@ export async function startTestApp(overrides: Partial<Config> = {}): Promise<Tes
   const clock = fakeClock();
   const mailer = fakeMailer();
   const log = memoryLog();
-  const config = { ...readConfig({ LANDFALL_DATA: folder, LANDFALL_DEMO: '0' }), ...overrides };
+  const config = {
+    ...readConfig({ LANDFALL_DATA: folder, LANDFALL_DEMO: '0' }),
+    webFolder: join(folder, 'no-web-build'),
+    ...overrides,
+  };
   const logger = createLogger({ isProduction: config.isProduction, destination: log.stream });
   const deps: Deps = {
     config,
