@@ -18,7 +18,7 @@ const BACKUP_NAME = /^landfall-\d{4}-\d{2}-\d{2}T\d{2}-\d{2}-\d{2}-\d{3}Z\.sqlit
 
 /** Writes and checks a copy, and returns its path. Throws (and removes the copy) when it is not sound. */
 export async function backUp({ databasePath, folder, at, keep }: BackupRequest): Promise<string> {
-  await mkdir(folder, { recursive: true });
+  await mkdir(folder, { recursive: true, mode: 0o700 });
   const path = join(folder, `landfall-${at.toISOString().replace(/[:.]/g, '-')}.sqlite`);
   await query(databasePath, 'VACUUM INTO ?', [path]);
   const verdict = await query(path, 'PRAGMA integrity_check', []);

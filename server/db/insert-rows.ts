@@ -12,21 +12,18 @@ export interface RowsToInsert {
   attributes: readonly string[];
   rows: readonly (readonly RowValue[])[];
   transaction: Transaction;
-  /** Hears how many rows are in; between the statements others have their turn. */
-  onProgress?: (done: number) => void;
 }
 
 const ROWS_PER_STATEMENT = 1000;
 
 export async function insertRows<M extends Model>(
   model: ModelStatic<M>,
-  { attributes, rows, transaction, onProgress }: RowsToInsert,
+  { attributes, rows, transaction }: RowsToInsert,
 ): Promise<void> {
   const sql = insertStatement(model, attributes);
   for (let from = 0; from < rows.length; from += ROWS_PER_STATEMENT) {
     const part = rows.slice(from, from + ROWS_PER_STATEMENT);
     await model.sequelize?.query(sql, { bind: [JSON.stringify(part)], transaction });
-    onProgress?.(from + part.length);
   }
 }
 

@@ -30,7 +30,7 @@ export function requestLog(logger: Logger): RequestHandler {
     const { route, actor } = (response as Response).locals;
     return {
       method: request.method,
-      route: (route as string | undefined) ?? 'page',
+      route: (route as string | undefined) ?? 'unmatched',
       status: response.statusCode,
       ms: value.responseTime,
       accountId: (actor as Actor | undefined)?.id,

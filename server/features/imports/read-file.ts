@@ -11,8 +11,8 @@ export type BiometryHeader = CsvHeader<TemplateColumn>;
 
 export interface BiometryFile {
   header: BiometryHeader;
-  /** `semicolon, UTF-8 with BOM`. */
-  readAs: string;
+  delimiterName: string;
+  encoding: string;
   /** Upper bound of the number of rows, known before they are read. */
   lines: number;
   /** Rows in batches. Throws {@link FileRefusedError} when the rest of the file cannot be trusted. */
@@ -36,7 +36,8 @@ export function readFile(bytes: Buffer): { file: BiometryFile } | { problems: Fi
   return {
     file: {
       header,
-      readAs: `${DELIMITER_NAMES[header.delimiter]}, ${hasByteOrderMark ? 'UTF-8 with BOM' : 'UTF-8'}`,
+      delimiterName: DELIMITER_NAMES[header.delimiter],
+      encoding: hasByteOrderMark ? 'UTF-8 with BOM' : 'UTF-8',
       lines: countLines(text),
       batches: () => rowBatches(text, header),
     },
