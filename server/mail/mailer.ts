@@ -23,7 +23,10 @@ export function createMailer(smtpUrl: string, onClose: () => Promise<void> = asy
     disableUrlAccess: true,
   });
   return {
-    send: async ({ to, subject, text }) => void (await transport.sendMail({ to, subject, text })),
+    send: async ({ to, subject, text }) => {
+      // As an object the address is taken as it stands: one recipient, whatever is in the text.
+      await transport.sendMail({ to: { name: '', address: to }, subject, text });
+    },
     close: async () => {
       transport.close();
       await onClose();

@@ -13,7 +13,8 @@ export interface Browser {
 const COOKIE = /^landfall_refresh=([^;]*)/;
 export const ORIGIN = 'http://localhost:3000';
 
-export function openBrowser(app: Express, cookie?: string): Browser {
+/** `app` may also be the address of a running server. */
+export function openBrowser(app: Express | string, cookie?: string): Browser {
   const browser: Browser = {
     cookie,
     signIn: (email, password) => keep(request(app).post('/api/auth/sign-in').send({ email, password })),
