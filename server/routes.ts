@@ -4,6 +4,8 @@ import type { Deps } from '@/server/deps';
 import { accountRoutes } from '@/server/features/accounts/account.routes';
 import { authRoutes } from '@/server/features/auth/auth.routes';
 import { homeRoutes } from '@/server/features/home/home.routes';
+import { importRoutes } from '@/server/features/imports/import.routes';
+import { measurementRoutes } from '@/server/features/measurements/measurement.routes';
 import { outboxRoutes } from '@/server/features/outbox/outbox.routes';
 import { practiceRoutes } from '@/server/features/practice/practice.routes';
 import type { Route } from '@/server/http/route';
@@ -14,6 +16,8 @@ export function allRoutes(deps: Deps): Route[] {
     ...authRoutes(deps),
     ...homeRoutes(),
     ...accountRoutes(deps),
+    ...measurementRoutes(),
+    ...importRoutes(deps),
     ...outboxRoutes(),
     ...auditRoutes(),
   ];

@@ -42,14 +42,12 @@ export const pageQuerySchema = z.object({
 
 /** One line of printable text: no control characters (NUL among them), trimmed, length-limited. */
 export function lineOf(maxLength: number, name = 'This') {
-  return (
-    z
-      .string()
-      .trim()
-      .max(maxLength, `${name} is longer than ${maxLength} characters`)
-       
-      .refine((text) => !/[\u0000-\u001f\u007f-\u009f]/.test(text), `${name} contains control characters`)
-  );
+  return z
+    .string()
+    .trim()
+    .max(maxLength, `${name} is longer than ${maxLength} characters`)
+
+    .refine((text) => !/[\u0000-\u001f\u007f-\u009f]/.test(text), `${name} contains control characters`);
 }
 /** As {@link lineOf}, and not empty. */
 export function requiredLineOf(maxLength: number, name = 'This') {
@@ -58,15 +56,13 @@ export function requiredLineOf(maxLength: number, name = 'This') {
 
 /** Several lines of text: line breaks allowed, no other control characters. */
 export function textOf(maxLength: number, name = 'This') {
-  return (
-    z
-      .string()
-      .trim()
-      .max(maxLength, `${name} is longer than ${maxLength} characters`)
-       
-      .refine(
-        (text) => !/[\u0000-\u0008\u000b-\u001f\u007f-\u009f]/.test(text),
-        `${name} contains control characters`,
-      )
-  );
+  return z
+    .string()
+    .trim()
+    .max(maxLength, `${name} is longer than ${maxLength} characters`)
+
+    .refine(
+      (text) => !/[\u0000-\u0008\u000b-\u001f\u007f-\u009f]/.test(text),
+      `${name} contains control characters`,
+    );
 }

@@ -1,6 +1,7 @@
 /** Free text without a schema, for the many rows of a file; the same rules as `lineOf` and `textOf`. */
 
 const CONTROL = /[\u0000-\u001f\u007f-\u009f]/;
+const EVERY_CONTROL = /[\u0000-\u001f\u007f-\u009f]/g;
 const CONTROL_BUT_LINE_BREAK = /[\u0000-\u0008\u000b-\u001f\u007f-\u009f]/;
 
 export interface TextRule {
@@ -18,8 +19,13 @@ export function textProblem(text: string, { name, maxLength, isMultiline }: Text
   return forbidden.test(text) ? `${name} contains control characters` : undefined;
 }
 
-/** A value as a message quotes it: never longer than a line, control characters shown as a box. */
+/** Foreign text as a line of a list or message: shortened, control characters shown as a box. */
+export function shownText(text: string, maxLength = 100): string {
+  const short = text.length > maxLength ? `${text.slice(0, maxLength)}…` : text;
+  return CONTROL.test(short) ? short.replace(EVERY_CONTROL, '\u25a1') : short;
+}
+
+/** A value as a message quotes it. */
 export function quoted(text: string): string {
-  const shown = text.length > 40 ? `${text.slice(0, 40)}…` : text;
-  return `"${shown.replace(/[\u0000-\u001f\u007f-\u009f]/g, '\u25a1')}"`;
+  return `"${shownText(text, 40)}"`;
 }

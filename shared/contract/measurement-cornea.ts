@@ -137,11 +137,16 @@ function withRadii(given: GivenCornea): Cornea {
   const scale = keratometricIndex === null ? 0 : dioptresTimesMm(keratometricIndex);
   return {
     ...given,
-    flatRadiusMm: flatRadiusMm ?? scale / (flatKD ?? 1),
-    steepRadiusMm: steepRadiusMm ?? scale / (steepKD ?? 1),
+    flatRadiusMm: flatRadiusMm ?? toPicometre(scale / (flatKD ?? 1)),
+    steepRadiusMm: steepRadiusMm ?? toPicometre(scale / (steepKD ?? 1)),
     flatAxisDeg: storedAxis(given.flatAxisDeg),
     steepAxisDeg: storedAxis(given.steepAxisDeg),
   };
+}
+
+/** Far below any meaning, and short enough to pass through JSON text and the database without a changed digit. */
+function toPicometre(radiusMm: number): number {
+  return Math.round(radiusMm * 1e9) / 1e9;
 }
 
 /** Power times radius. Rounded so that index 1.3375 gives 337.5 and not its floating-point neighbour. */

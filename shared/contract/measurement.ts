@@ -83,7 +83,7 @@ export type Measurement = z.infer<typeof measurementSchema>;
 
 export interface MeasurementField {
   /** Column of the CSV template. */
-  column: string;
+  column: TemplateColumn;
   field: keyof MeasurementValues;
   label: string;
   unit: string;

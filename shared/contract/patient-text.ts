@@ -53,6 +53,14 @@ export function readSide(text: string): { side: Side } | { message: string } {
   return side === undefined ? { message: choiceProblem('Side', text, SIDES) } : { side };
 }
 
+/** As lists and sheets write a patient: family name first. */
+export function formatPatientName({
+  familyName,
+  givenName,
+}: Pick<PatientInput, 'familyName' | 'givenName'>): string {
+  return [familyName, givenName].filter((name) => name !== '').join(', ');
+}
+
 function birthDateProblem(date: string, today: string): string | undefined {
   if (date === '') return 'Birth date is missing';
   if (!isCalendarDate(date)) return `${quoted(date)} is not a date of the calendar: write it as YYYY-MM-DD`;

@@ -1,5 +1,5 @@
 /** The reading of a patient in a file says the same as the schema of the form. */
-import fc from 'fast-check';
+import * as fc from 'fast-check';
 import { patientInputSchema, readPatient, readSide, type PatientText } from '@/shared/contract';
 
 const today = new Date().toISOString().slice(0, 10);

@@ -157,8 +157,14 @@ async function toStored(
   transaction: Transaction | undefined,
 ): Promise<StoredMeasurement[]> {
   const [authors, files] = await Promise.all([
-    namesOf(rows.map((row) => row.createdBy), transaction),
-    fileNamesOf(rows.flatMap((row) => row.importId ?? []), transaction),
+    namesOf(
+      rows.map((row) => row.createdBy),
+      transaction,
+    ),
+    fileNamesOf(
+      rows.flatMap((row) => row.importId ?? []),
+      transaction,
+    ),
   ]);
   return rows.map((row) => {
     const createdBy = authors.get(row.createdBy) ?? '';
@@ -176,7 +182,9 @@ async function toStored(
 }
 
 function valuesOf(row: MeasurementModel): MeasurementValues {
-  return Object.fromEntries(VALUE_ATTRIBUTES.map((attribute) => [attribute, row[attribute]])) as MeasurementValues;
+  return Object.fromEntries(
+    VALUE_ATTRIBUTES.map((attribute) => [attribute, row[attribute]]),
+  ) as MeasurementValues;
 }
 
 function provenanceOf(

@@ -122,15 +122,14 @@ async function refuseKnown(act: Act, eye: Eye, contentHash: string): Promise<voi
   const known = await listKeysOfEyes([eye.id], act.transaction);
   const same = known.find((key) => key.contentHash === contentHash);
   if (same) {
-    throw takenField('text', `The same measurement of this eye is stored since ${same.createdAt.slice(0, 10)}`);
+    throw takenField(
+      'text',
+      `The same measurement of this eye is stored since ${same.createdAt.slice(0, 10)}`,
+    );
   }
 }
 
-async function findSuperseded(
-  act: Act,
-  eye: Eye,
-  id: string | null,
-): Promise<StoredMeasurement | undefined> {
+async function findSuperseded(act: Act, eye: Eye, id: string | null): Promise<StoredMeasurement | undefined> {
   if (id === null) return undefined;
   const stored = await findStored(id, act.transaction);
   if (stored?.eyeId !== eye.id) {

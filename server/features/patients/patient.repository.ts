@@ -61,7 +61,9 @@ export async function changePatient(
   transaction: Transaction,
 ): Promise<Patient> {
   const row = await PatientModel.findByPk(id, { transaction, rejectOnEmpty: true });
-  return toPatient(await row.update({ ...input, searchKey: searchKeyOf(input), updatedAt: at }, { transaction }));
+  return toPatient(
+    await row.update({ ...input, searchKey: searchKeyOf(input), updatedAt: at }, { transaction }),
+  );
 }
 
 /** Patients in the order of their folded names, from the one after the patient `after`. */
@@ -72,7 +74,12 @@ export async function listPatientsAfter(
 ): Promise<Patient[]> {
   const last = after === undefined ? null : await PatientModel.findByPk(after);
   const beyond: WhereOptions = last
-    ? { [Op.or]: [{ searchKey: { [Op.gt]: last.searchKey } }, { searchKey: last.searchKey, id: { [Op.gt]: last.id } }] }
+    ? {
+        [Op.or]: [
+          { searchKey: { [Op.gt]: last.searchKey } },
+          { searchKey: last.searchKey, id: { [Op.gt]: last.id } },
+        ],
+      }
     : {};
   const rows = await PatientModel.findAll({
     where: { [Op.and]: [...terms.map(matches), beyond] },
