@@ -11,6 +11,7 @@ import { mountRoutes } from '@/server/http/mount';
 import { openApiRoute } from '@/server/http/openapi';
 import { publicRateLimit } from '@/server/http/rate-limit';
 import { requestId } from '@/server/http/request-id';
+import type { Route } from '@/server/http/route';
 import { noStore, securityHeaders } from '@/server/http/security-headers';
 import { readIndexHtml, serveWeb } from '@/server/http/serve-web';
 import { allRoutes } from '@/server/routes';
@@ -22,7 +23,6 @@ const PUBLIC_PREFIXES = ['/api/auth', '/api/setup'];
 export function createApp(deps: Deps): Express {
   const { config, logger } = deps;
   const indexHtml = readIndexHtml(config.webFolder);
-  const routes = allRoutes(deps);
   const app = express();
 
   app.disable('x-powered-by');
@@ -42,11 +42,17 @@ export function createApp(deps: Deps): Express {
   mountRoutes(app, {
     deps,
     authenticate: createAuthenticate(deps),
-    routes: [...routes, openApiRoute(routes)],
+    routes: declaredRoutes(deps),
   });
 
   app.use(serveWeb(config.webFolder, indexHtml));
   app.use(unknownPath);
   app.use(errorHandler(logger));
   return app;
+}
+
+/** The routes of the features, and the one that describes them. */
+export function declaredRoutes(deps: Deps): Route[] {
+  const routes = allRoutes(deps);
+  return [...routes, openApiRoute(routes)];
 }

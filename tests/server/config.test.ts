@@ -1,6 +1,5 @@
-import { isAbsolute } from 'node:path';
+import { isAbsolute, join } from 'node:path';
 import { statSync } from 'node:fs';
-import { join } from 'node:path';
 import { readConfig } from '@/server/config';
 import { loadTokenSecret } from '@/server/secret';
 import { temporaryFolder } from '@/tests/support/temporary-folder';
