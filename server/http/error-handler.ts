@@ -31,8 +31,7 @@ export function sendProblem(response: Response, problem: ProblemError): void {
 
 function asProblem(error: unknown): ProblemError {
   if (error instanceof ProblemError) return error;
-  const { name, code, status } = describe(error);
-  if (name === 'MulterError') return fromUpload(code);
+  const { name, status } = describe(error);
   if (isTaken(error)) return new ProblemError('conflict');
   if (name === 'SequelizeOptimisticLockError') return new ProblemError('changed-meanwhile');
   return new ProblemError((status === undefined ? undefined : CLIENT_ERRORS[status]) ?? 'internal');
@@ -55,12 +54,8 @@ const CLIENT_ERRORS: Record<number, ProblemCode> = {
   415: 'unsupported-type',
 };
 
-function fromUpload(code: unknown): ProblemError {
-  return code === 'LIMIT_FILE_SIZE' ? new ProblemError('too-large') : new ProblemError('bad-request');
-}
-
-function describe(error: unknown): { name: string; code?: unknown; status?: number } {
+function describe(error: unknown): { name: string; status?: number } {
   if (!(error instanceof Error)) return { name: '' };
-  const { code, status } = error as Error & { code?: unknown; status?: unknown };
-  return { name: error.name, code, status: typeof status === 'number' ? status : undefined };
+  const { status } = error as Error & { status?: unknown };
+  return { name: error.name, status: typeof status === 'number' ? status : undefined };
 }

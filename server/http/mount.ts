@@ -6,6 +6,7 @@ import { inAct, type Act, type Actor } from '@/server/act';
 import { recordAudit } from '@/server/audit/writer';
 import type { Deps } from '@/server/deps';
 import type { Authenticate } from '@/server/http/auth';
+import { checkReply } from '@/server/http/check-reply';
 import { versionFromIfMatch } from '@/server/http/etag';
 import { performOnce, repeatableRequest } from '@/server/http/idempotency';
 import { ProblemError } from '@/server/http/problem';
@@ -65,7 +66,17 @@ function receiveUpload({ upload }: Route): RequestHandler[] {
   if (!upload) return [];
   const limits = { fileSize: upload.maxBytes, files: 1, fields: 20, fieldSize: 100_000 };
   // Browsers send file names as UTF-8; the parser would take them for Latin-1.
-  return [multer({ limits, defParamCharset: 'utf8' }).single(upload.field)];
+  const receive = multer({ limits, defParamCharset: 'utf8' }).single(upload.field);
+  return [
+    (request, response, next) =>
+      receive(request, response, (error?: unknown) => next(error && uploadProblem(error))),
+  ];
+}
+
+/** Whatever goes wrong while a form is taken apart lies in the form. */
+function uploadProblem(error: unknown): ProblemError {
+  const isTooLarge = error instanceof multer.MulterError && error.code === 'LIMIT_FILE_SIZE';
+  return new ProblemError(isTooLarge ? 'too-large' : 'bad-request');
 }
 
 function answer({ deps, route }: Frame): RequestHandler {
@@ -102,12 +113,6 @@ function writer(deps: Deps, request: Request, response: Response) {
   };
 }
 
-/** Outside production a reply that does not fit the contract is an error, so that tests find it. */
-function checkReply(route: Route, reply: Reply): void {
-  if (typeof route.reply === 'object') route.reply.parse(reply.body);
-  else if (reply.body !== undefined) throw new Error(`${route.path} declares no schema for its reply`);
-}
-
 function send(response: Response, { status, body, bytes, headers = {} }: Reply): void {
   response.status(status).set(headers);
   if (bytes) response.send(bytes);
@@ -125,8 +130,8 @@ function uploadOf({ file }: Request): UploadedFile | undefined {
 
 /** `/api/imports/demo.csv` must be tried before `/api/imports/:id`. */
 function literalSegmentsFirst(a: Route, b: Route): number {
-  const [first, second] = [a, b].map(({ path }) => path.replaceAll(':', '\uffff'));
-  return (first ?? '') < (second ?? '') ? -1 : 1;
+  const [first = '', second = ''] = [a, b].map(({ path }) => path.replaceAll(':', '\uffff'));
+  return Number(first > second) - Number(first < second);
 }
 
 function refuseDuplicates(routes: readonly Route[]): void {

@@ -63,4 +63,8 @@ describe('starting and stopping', () => {
     expect(demoAccounts).toHaveLength(5);
     expect(accounts).toBe(5);
   });
+
+  it('refuses to run a real practice on the data of the demonstration', async () => {
+    await expect(startServer({ ...config, isDemo: false }, logger)).rejects.toThrow(/folder of its own/);
+  });
 });
