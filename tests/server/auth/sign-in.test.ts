@@ -93,6 +93,14 @@ describe('signing in', () => {
     expect((await auditOf('session.refused')).at(-1)?.detail).toEqual({ reason, attemptsLeft: 4 });
   });
 
+  it('is refused when the account is disabled while the password is being checked', async () => {
+    const signingIn = openBrowser(test.app).signIn(surgeon.email, TEST_PASSWORD);
+    await new Promise((resolve) => setTimeout(resolve, 60));
+    await AccountModel.update({ status: 'disabled' }, { where: { id: surgeon.id } });
+
+    expect((await signingIn).status).toBe(401);
+  });
+
   it('spends a password hash on an unknown address too', async () => {
     const time = async (email: string): Promise<number> => {
       const startMs = performance.now();
