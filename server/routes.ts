@@ -3,10 +3,13 @@ import { auditRoutes } from '@/server/audit/audit.routes';
 import type { Deps } from '@/server/deps';
 import { accountRoutes } from '@/server/features/accounts/account.routes';
 import { authRoutes } from '@/server/features/auth/auth.routes';
+import { eyeRoutes } from '@/server/features/eyes/eye.routes';
 import { homeRoutes } from '@/server/features/home/home.routes';
 import { importRoutes } from '@/server/features/imports/import.routes';
+import { lensRoutes } from '@/server/features/lenses/lens.routes';
 import { measurementRoutes } from '@/server/features/measurements/measurement.routes';
 import { outboxRoutes } from '@/server/features/outbox/outbox.routes';
+import { patientRoutes } from '@/server/features/patients/patient.routes';
 import { practiceRoutes } from '@/server/features/practice/practice.routes';
 import type { Route } from '@/server/http/route';
 
@@ -16,8 +19,11 @@ export function allRoutes(deps: Deps): Route[] {
     ...authRoutes(deps),
     ...homeRoutes(),
     ...accountRoutes(deps),
+    ...patientRoutes(deps),
+    ...eyeRoutes(),
     ...measurementRoutes(),
     ...importRoutes(deps),
+    ...lensRoutes(),
     ...outboxRoutes(),
     ...auditRoutes(),
   ];

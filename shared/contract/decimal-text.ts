@@ -16,6 +16,14 @@ export function parseDecimal(text: string): number | undefined | null {
   return value === 0 ? 0 : value;
 }
 
+/**
+ * To the billionth: far below any meaning (a millionth of a µm), and a number that passes through text and the
+ * database without a changed digit.
+ */
+export function toNineDecimals(value: number): number {
+  return Math.round(value * 1e9) / 1e9;
+}
+
 export interface DecimalLimits {
   /** How the field is called in messages, with unit: `Axial length (mm)`. */
   name: string;

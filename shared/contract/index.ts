@@ -7,6 +7,7 @@ export * from './decimal-text';
 export * from './free-text';
 export * from './lens';
 export * from './measurement';
+export * from './measurement-as-text';
 export * from './measurement-text';
 export * from './paths';
 export * from './patient';

@@ -2,8 +2,10 @@
  * Lens catalogue: models, their powers, and constants per formula with where they come from.
  */
 import { z } from 'zod';
+import { rowProblemSchema } from './biometry-import';
+import { idSchema, isoDateSchema, isoInstantSchema, lineOf, requiredLineOf, versionSchema } from './common';
 import { CONSTANT_ORIGINS } from './measurement';
-import { idSchema, isoDateSchema, lineOf, requiredLineOf, versionSchema } from './common';
+import { fieldErrorSchema } from './problem';
 
 export const LENS_KINDS = ['monofocal', 'monofocal-plus', 'extended-depth-of-focus', 'multifocal'] as const;
 export type LensKind = (typeof LENS_KINDS)[number];
@@ -31,16 +33,24 @@ export const FORMULA_NAMES: Record<(typeof FORMULA_IDS)[number], string> = {
   haigis: 'Haigis',
 };
 
+/** Outside these a constant is a typing error, or a constant of something else. */
+export const CONSTANT_LIMITS = {
+  aConstant: { min: 100, max: 130 },
+  surgeonFactorMm: { min: -3, max: 6 },
+  pAcdMm: { min: 1, max: 9 },
+  a0Mm: { min: -10, max: 10 },
+  a1: { min: -2, max: 2 },
+  a2: { min: -2, max: 2 },
+} as const;
+const constantNumber = (key: keyof typeof CONSTANT_LIMITS) =>
+  z.number().min(CONSTANT_LIMITS[key].min).max(CONSTANT_LIMITS[key].max);
+
 /** Same shapes as the door of `formulas/`. */
 export const constantValuesSchema = z.union([
-  z.strictObject({ aConstant: z.number().min(100).max(130) }),
-  z.strictObject({ surgeonFactorMm: z.number().min(-3).max(6) }),
-  z.strictObject({ pAcdMm: z.number().min(1).max(9) }),
-  z.strictObject({
-    a0Mm: z.number().min(-10).max(10),
-    a1: z.number().min(-2).max(2),
-    a2: z.number().min(-2).max(2),
-  }),
+  z.strictObject({ aConstant: constantNumber('aConstant') }),
+  z.strictObject({ surgeonFactorMm: constantNumber('surgeonFactorMm') }),
+  z.strictObject({ pAcdMm: constantNumber('pAcdMm') }),
+  z.strictObject({ a0Mm: constantNumber('a0Mm'), a1: constantNumber('a1'), a2: constantNumber('a2') }),
 ]);
 export type ConstantValues = z.infer<typeof constantValuesSchema>;
 
@@ -148,3 +158,51 @@ export const LENS_COLUMNS = [
   'haigis_a2',
   'remarks',
 ] as const;
+
+/** A set of constants as it was recorded; `replacedAt` is null for the one in use. */
+export const recordedConstantSchema = z.object({
+  formula: formulaIdSchema,
+  origin: z.enum(CONSTANT_ORIGINS),
+  values: constantValuesSchema,
+  source: z.string(),
+  dated: isoDateSchema,
+  recordedAt: isoInstantSchema,
+  recordedBy: z.string(),
+  replacedAt: isoInstantSchema.nullable(),
+});
+export type RecordedConstant = z.infer<typeof recordedConstantSchema>;
+
+/** One model as its own page shows it. */
+export const lensDetailSchema = lensSchema.extend({
+  /** Every set of constants that ever was in use, newest first. */
+  constantHistory: z.array(recordedConstantSchema),
+});
+export type LensDetail = z.infer<typeof lensDetailSchema>;
+
+export const LENS_IMPORT_MAX_BYTES = 1024 * 1024;
+export const LENS_ROW_OUTCOMES = ['created', 'changed', 'already-there', 'refused'] as const;
+export type LensRowOutcome = (typeof LENS_ROW_OUTCOMES)[number];
+export const lensImportQuerySchema = z.object({ dryRun: z.enum(['0', '1']).optional() });
+
+/** What a catalogue file does, line by line. Nothing is stored while any line is refused. */
+export const lensImportResultSchema = z.object({
+  isStored: z.boolean(),
+  rows: z.array(
+    z.object({
+      row: z.number().int(),
+      name: z.string(),
+      outcome: z.enum(LENS_ROW_OUTCOMES),
+      summary: z.string(),
+      problems: z.array(rowProblemSchema),
+    }),
+  ),
+  counts: z.object({
+    created: z.number().int(),
+    changed: z.number().int(),
+    alreadyThere: z.number().int(),
+    refused: z.number().int(),
+  }),
+  /** Why the file as a whole was refused. */
+  problems: z.array(fieldErrorSchema),
+});
+export type LensImportResult = z.infer<typeof lensImportResultSchema>;

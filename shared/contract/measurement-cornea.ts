@@ -3,6 +3,7 @@
  * together with its keratometric index; where both are given they must tell the same story.
  */
 import { axisDifferenceDeg } from '@/formulas';
+import { toNineDecimals } from './decimal-text';
 import type { MeasurementValues } from './measurement';
 
 export type CorneaField =
@@ -137,16 +138,11 @@ function withRadii(given: GivenCornea): Cornea {
   const scale = keratometricIndex === null ? 0 : dioptresTimesMm(keratometricIndex);
   return {
     ...given,
-    flatRadiusMm: flatRadiusMm ?? toPicometre(scale / (flatKD ?? 1)),
-    steepRadiusMm: steepRadiusMm ?? toPicometre(scale / (steepKD ?? 1)),
+    flatRadiusMm: flatRadiusMm ?? toNineDecimals(scale / (flatKD ?? 1)),
+    steepRadiusMm: steepRadiusMm ?? toNineDecimals(scale / (steepKD ?? 1)),
     flatAxisDeg: storedAxis(given.flatAxisDeg),
     steepAxisDeg: storedAxis(given.steepAxisDeg),
   };
-}
-
-/** Far below any meaning, and short enough to pass through JSON text and the database without a changed digit. */
-function toPicometre(radiusMm: number): number {
-  return Math.round(radiusMm * 1e9) / 1e9;
 }
 
 /** Power times radius. Rounded so that index 1.3375 gives 337.5 and not its floating-point neighbour. */

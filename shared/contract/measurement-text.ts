@@ -5,7 +5,7 @@
 import { z } from 'zod';
 import { isCalendarDate, localDateOf } from './calendar';
 import { idSchema, textOf } from './common';
-import { parseDecimal } from './decimal-text';
+import { parseDecimal, toNineDecimals } from './decimal-text';
 import { quoted, textProblem } from './free-text';
 import {
   ACD_FROM,
@@ -237,7 +237,7 @@ function readNumber({ text, refuse }: Reader, field: MeasurementField): number |
     refuse(field.field, `${field.label} ${quoted(given.trim())} is not a number`);
     return undefined;
   }
-  if (value >= field.min && value <= field.max) return value;
+  if (value >= field.min && value <= field.max) return toNineDecimals(value);
   const hint = unitHint(field, value);
   const limits = `${field.label} must lie between ${field.min} and ${field.max}${field.unit && ` ${field.unit}`}`;
   refuse(field.field, hint === undefined ? limits : `${limits}; ${value} ${hint}`);

@@ -203,3 +203,4 @@ export const settlementInputSchema = z.object({
   measurementId: idSchema.nullable(),
   reason: textOf(500, 'Reason').pipe(z.string().min(5, 'Give a reason of a few words')),
 });
+export type SettlementInput = z.infer<typeof settlementInputSchema>;

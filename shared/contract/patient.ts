@@ -65,6 +65,15 @@ export type EyeSummary = z.infer<typeof eyeSummarySchema>;
 export const patientListItemSchema = patientSchema.extend({ eyes: z.array(eyeSummarySchema) });
 export type PatientListItem = z.infer<typeof patientListItemSchema>;
 
+/** One patient as its own page shows it. */
+export const patientDetailSchema = patientListItemSchema.extend({
+  /** Others with the same name and birth date: a note, never a refusal. */
+  possibleDuplicates: z.array(
+    patientSchema.pick({ id: true, recordNumber: true, familyName: true, givenName: true }),
+  ),
+});
+export type PatientDetail = z.infer<typeof patientDetailSchema>;
+
 export const CORNEAL_SURGERY_ANSWERS = ['no', 'yes', 'unknown'] as const;
 export const CORNEAL_SURGERY_KINDS = [
   'myopic-laser',

@@ -17,6 +17,7 @@ import {
   type Side,
   type TemplateColumn,
 } from '@/shared/contract';
+import { withoutFormulaEscape } from '@/server/csv/formula-text';
 import type { CsvRecord } from '@/server/csv/records';
 import { contentDigest } from '@/server/features/measurements/content-digest';
 import type { BiometryHeader } from './read-file';
@@ -57,7 +58,8 @@ const PATIENT_COLUMNS = {
 const PATIENT_FIELDS = Object.keys(PATIENT_COLUMNS) as (keyof PatientInput)[];
 
 export function readRow({ header, today }: RowReader, { line, fields }: CsvRecord): RowReading {
-  const valueAt = (column: TemplateColumn): string => fields[header.places[column]] ?? '';
+  const valueAt = (column: TemplateColumn): string =>
+    withoutFormulaEscape(fields[header.places[column]] ?? '');
   const patientText = {} as PatientText;
   for (const field of PATIENT_FIELDS) patientText[field] = valueAt(PATIENT_COLUMNS[field]);
   const reading: RowReading = {

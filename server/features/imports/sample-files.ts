@@ -2,8 +2,9 @@
 import { existsSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { TEMPLATE_COLUMNS } from '@/shared/contract';
+import { toCsv } from '@/server/reports/csv';
 
-export const templateCsv = (): Buffer => Buffer.from(`${TEMPLATE_COLUMNS.join(',')}\r\n`);
+export const templateCsv = (): Buffer => toCsv({ columns: TEMPLATE_COLUMNS, rows: [] });
 
 /** Undefined where the demonstration's file is not part of the installation. */
 export function demoCsv(): Buffer | undefined {
