@@ -1,0 +1,1 @@
+export { SignedInLayout as default } from '@/shared/client/features/shell/signed-in-layout';

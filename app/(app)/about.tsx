@@ -1,0 +1,1 @@
+export { AboutScreen as default } from '@/shared/client/features/about/about-screen';

@@ -1,0 +1,1 @@
+export { AccountScreen as default } from '@/shared/client/features/accounts/account-screen';

@@ -1,0 +1,1 @@
+export { AccountsScreen as default } from '@/shared/client/features/accounts/accounts-screen';

@@ -1,0 +1,1 @@
+export { InviteScreen as default } from '@/shared/client/features/accounts/invite-screen';

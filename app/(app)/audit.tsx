@@ -1,0 +1,1 @@
+export { AuditScreen as default } from '@/shared/client/features/accounts/audit-screen';

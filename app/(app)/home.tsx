@@ -1,0 +1,1 @@
+export { HomeScreen as default } from '@/shared/client/features/home/home-screen';

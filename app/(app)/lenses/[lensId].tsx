@@ -1,0 +1,1 @@
+export { LensScreen as default } from '@/shared/client/features/lenses/lens-screen';

@@ -1,0 +1,1 @@
+export { LensImportScreen as default } from '@/shared/client/features/lenses/lens-import-screen';

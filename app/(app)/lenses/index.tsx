@@ -1,0 +1,1 @@
+export { LensesScreen as default } from '@/shared/client/features/lenses/lenses-screen';

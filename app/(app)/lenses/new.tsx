@@ -1,0 +1,1 @@
+export { NewLensScreen as default } from '@/shared/client/features/lenses/new-lens-screen';

@@ -1,0 +1,1 @@
+export { OutboxScreen as default } from '@/shared/client/features/accounts/outbox-screen';

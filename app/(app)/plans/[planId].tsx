@@ -1,0 +1,1 @@
+export { PlanDeskScreen as default } from '@/shared/client/features/plans/plan-desk-screen';

@@ -1,0 +1,1 @@
+export { PlansScreen as default } from '@/shared/client/features/plans/plans-screen';

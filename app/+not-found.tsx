@@ -1,0 +1,1 @@
+export { NotFoundScreen as default } from '@/shared/client/features/shell/not-found-screen';

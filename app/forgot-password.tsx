@@ -1,0 +1,1 @@
+export { ForgotPasswordScreen as default } from '@/shared/client/features/auth/forgot-password-screen';

@@ -1,0 +1,1 @@
+export { StartRedirect as default } from '@/shared/client/features/shell/start-redirect';

@@ -1,0 +1,1 @@
+export { SetPasswordScreen as default } from '@/shared/client/features/auth/set-password-screen';

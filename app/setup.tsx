@@ -1,0 +1,1 @@
+export { SetupScreen as default } from '@/shared/client/features/auth/setup-screen';

@@ -1,0 +1,1 @@
+export { SignInScreen as default } from '@/shared/client/features/auth/sign-in-screen';

@@ -1,0 +1,172 @@
+/**
+ * Anatomy of a field: label, unit beside the label, hint, control, error. The error is tied to the control
+ * by aria-describedby and is not shouted; a form's summary does that once.
+ */
+import { useId, useRef } from 'react';
+import type { ReactNode, Ref } from 'react';
+import { Pressable, TextInput, View } from 'react-native';
+import type { TextInputProps } from 'react-native';
+import { useTheme } from '@/shared/client/theme/theme-context';
+import { FONT, RADIUS, SIZE, SPACE, TOUCH_PX } from '@/shared/client/theme/tokens';
+import { useFocusRing } from './focus-ring';
+import { Text } from './text';
+
+export interface FieldIds {
+  labelId: string;
+  describedBy: string | undefined;
+}
+
+export interface FieldFrameProps {
+  label: string;
+  unit?: string;
+  hint?: string;
+  error?: string;
+  isRequired?: boolean;
+  onPressLabel?: () => void;
+  children: (ids: FieldIds) => ReactNode;
+}
+
+export function FieldFrame({
+  label,
+  unit,
+  hint,
+  error,
+  isRequired,
+  onPressLabel,
+  children,
+}: FieldFrameProps) {
+  const id = useId();
+  const ids = { label: `${id}-label`, hint: `${id}-hint`, error: `${id}-error` };
+  const describedBy = [hint ? ids.hint : '', error ? ids.error : ''].filter(Boolean).join(' ') || undefined;
+  return (
+    <View style={{ gap: SPACE.xs, minWidth: 0 }}>
+      <Pressable
+        onPress={onPressLabel}
+        tabIndex={-1}
+        style={{ flexDirection: 'row', flexWrap: 'wrap', gap: SPACE.xs, cursor: 'auto' }}
+      >
+        <Text variant="strong" id={ids.label}>
+          {label}
+        </Text>
+        {unit ? <Text color="ink2">{`(${unit})`}</Text> : null}
+        {isRequired ? null : <Text color="ink2">optional</Text>}
+      </Pressable>
+      {hint ? (
+        <Text variant="small" color="ink2" id={ids.hint}>
+          {hint}
+        </Text>
+      ) : null}
+      {children({ labelId: ids.label, describedBy })}
+      {error ? (
+        <Text variant="small" color="stop" id={ids.error}>
+          {`▪ ${error}`}
+        </Text>
+      ) : null}
+    </View>
+  );
+}
+
+export interface TextFieldProps {
+  label: string;
+  value: string;
+  onChange: (text: string) => void;
+  onBlur?: () => void;
+  onSubmit?: () => void;
+  unit?: string;
+  hint?: string;
+  error?: string;
+  isRequired?: boolean;
+  isDisabled?: boolean;
+  isMultiline?: boolean;
+  /** Numbers: tabular figures, decimal keyboard. */
+  isNumber?: boolean;
+  type?: 'text' | 'email' | 'password' | 'search';
+  autoComplete?: TextInputProps['autoComplete'];
+  autoFocus?: boolean;
+  placeholder?: string;
+  ref?: Ref<TextInput>;
+}
+
+export function TextField(props: TextFieldProps) {
+  const own = useRef<TextInput>(null);
+  const setRef = (element: TextInput | null) => {
+    own.current = element;
+    if (typeof props.ref === 'function') props.ref(element);
+    else if (props.ref) props.ref.current = element;
+  };
+  return (
+    <FieldFrame
+      label={props.label}
+      unit={props.unit}
+      hint={props.hint}
+      error={props.error}
+      isRequired={props.isRequired}
+      onPressLabel={() => own.current?.focus()}
+    >
+      {(ids) => <Input {...props} ref={setRef} ids={ids} />}
+    </FieldFrame>
+  );
+}
+
+function Input({
+  ids,
+  ref,
+  ...props
+}: Omit<TextFieldProps, 'ref'> & { ids: FieldIds; ref: (element: TextInput | null) => void }) {
+  const { colors } = useTheme();
+  const ring = useFocusRing();
+  const { type = 'text' } = props;
+  return (
+    <TextInput
+      ref={ref}
+      value={props.value}
+      onChangeText={props.onChange}
+      onSubmitEditing={props.onSubmit}
+      aria-labelledby={ids.labelId}
+      {...({
+        'aria-describedby': ids.describedBy,
+        'aria-invalid': props.error ? true : undefined,
+        'aria-required': props.isRequired || undefined,
+      } as object)}
+      editable={!props.isDisabled}
+      multiline={props.isMultiline}
+      secureTextEntry={type === 'password'}
+      inputMode={
+        props.isNumber ? 'decimal' : type === 'email' ? 'email' : type === 'search' ? 'search' : 'text'
+      }
+      autoComplete={props.autoComplete ?? 'off'}
+      autoCapitalize="none"
+      autoCorrect={false}
+      spellCheck={false}
+      autoFocus={props.autoFocus}
+      placeholder={props.placeholder}
+      placeholderTextColor={colors.ink2}
+      onFocus={ring.onFocus}
+      onBlur={() => {
+        ring.onBlur();
+        props.onBlur?.();
+      }}
+      style={[
+        {
+          minHeight: props.isMultiline ? TOUCH_PX * 2 : TOUCH_PX,
+          borderWidth: props.error ? 2 : 1,
+          borderColor: props.error ? colors.stop : colors.line,
+          borderRadius: RADIUS,
+          backgroundColor: colors.surface,
+          color: colors.ink,
+          paddingHorizontal: SPACE.m,
+          paddingVertical: SPACE.s,
+          fontSize: SIZE.large,
+          fontFamily: props.isNumber ? FONT.numbers : FONT.words,
+          opacity: props.isDisabled ? 0.6 : 1,
+        },
+        ring.style,
+      ]}
+    />
+  );
+}
+
+/** A number typed as text: `,` and `.` both mark decimals, the typed text stays as it is. */
+export function DecimalField(props: Omit<TextFieldProps, 'isNumber' | 'type'>) {
+  return <TextField {...props} isNumber />;
+}
