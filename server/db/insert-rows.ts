@@ -50,13 +50,15 @@ function insertStatement(table: string, columns: readonly Column[]): string {
   const values = columns.map(({ isDecimal }, index) =>
     isDecimal ? `(value ->> ${index}) / 1000000000.0` : `value ->> ${index}`,
   );
-  return `INSERT INTO ${table} (${names.join(', ')}) SELECT ${values.join(', ')} FROM json_each($1)`;
+  return `INSERT INTO ${table} (${names.join(', ')}) SELECT ${values.join(', ')} FROM jsonb_each($1)`;
 }
 
 function encode(row: readonly RowValue[], columns: readonly Column[]): RowValue[] {
-  return row.map((value, index) =>
-    typeof value === 'number' && columns[index]?.isDecimal ? billionths(value) : value,
-  );
+  return row.map((value, index) => {
+    if (typeof value === 'number') return columns[index]?.isDecimal ? billionths(value) : value;
+    // As text: SQLite need not take it apart to put it in.
+    return typeof value === 'object' && value !== null ? JSON.stringify(value) : value;
+  });
 }
 
 function billionths(value: number): number {

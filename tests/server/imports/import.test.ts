@@ -2,7 +2,9 @@
 import request from 'supertest';
 import { paths, type BiometryImport } from '@/shared/contract';
 import { AuditEntryModel } from '@/server/db/models/audit-entry';
+import { recoverImports } from '@/server/features/imports/import.service';
 import { EyeModel } from '@/server/db/models/eye';
+import { ImportModel } from '@/server/db/models/import';
 import { MeasurementModel } from '@/server/db/models/measurement';
 import { PatientModel } from '@/server/db/models/patient';
 import { csvOf, manyRows } from '@/tests/support/biometry-csv';
@@ -353,6 +355,43 @@ describe('the file itself', () => {
 
   it('has no demonstration file outside the demonstration', async () => {
     expect((await technician.get(paths.importDemoFile())).status).toBe(404);
+  });
+});
+
+describe('after the process ended in the middle', () => {
+  it('checks anew what was being checked, and makes ready what was being stored', async () => {
+    const checking = await upload(test, technician, csvOf([{}]));
+    const storing = await upload(test, technician, csvOf([{ side: 'left' }]));
+    await ImportModel.update({ status: 'checking', readAs: '' }, { where: { id: checking.id } });
+    await ImportModel.update({ status: 'storing', storedBy: technician.id }, { where: { id: storing.id } });
+
+    await recoverImports(test.deps);
+    await test.deps.background.idle();
+
+    expect((await technician.get(paths.import(checking.id))).body).toMatchObject({
+      status: 'ready',
+      readAs: 'comma, decimal point, UTF-8',
+      counts: { created: 1 },
+    });
+    expect((await technician.get(paths.import(storing.id))).body).toMatchObject({
+      status: 'ready',
+      storedBy: null,
+    });
+    expect(await countAll()).toEqual(NOTHING);
+  });
+
+  it('is ready again when storing fails, with nothing stored', async () => {
+    const { id } = await upload(test, technician, csvOf([{}, { side: 'left' }]));
+    await test.deps.db.sequelize.query(
+      `CREATE TRIGGER fail BEFORE INSERT ON measurements WHEN NEW.import_row = 3 BEGIN SELECT RAISE(ABORT, 'disk'); END`,
+    );
+    const failed = await confirm(test, technician, id);
+    await test.deps.db.sequelize.query('DROP TRIGGER fail');
+
+    expect(failed).toMatchObject({ status: 'ready', storedBy: null, storedAt: null });
+    expect(await countAll()).toEqual(NOTHING);
+    expect(test.log()).toContain('import.store');
+    expect((await confirm(test, technician, id)).counts.created).toBe(2);
   });
 });
 
