@@ -18,6 +18,9 @@ const nodeProject = (displayName, folder) => ({
   },
 });
 
+/** The d3 packages export ES modules, which jest does not load; their bundles are the same code. */
+const d3Bundles = { '^(d3-[a-z-]+)$': '<rootDir>/node_modules/$1/dist/$1.js' };
+
 module.exports = {
   projects: [
     nodeProject('formulas', 'formulas'),
@@ -29,7 +32,7 @@ module.exports = {
       preset: 'jest-expo/web',
       rootDir: __dirname,
       testMatch: ['<rootDir>/tests/client/**/*.test.ts?(x)'],
-      moduleNameMapper: alias,
+      moduleNameMapper: { ...alias, ...d3Bundles },
       setupFilesAfterEnv: ['<rootDir>/tests/support/client-setup.ts'],
     },
   ],
