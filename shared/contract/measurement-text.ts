@@ -127,7 +127,7 @@ function valuesOf(
 
 const measurementTextInput = z.object(
   Object.fromEntries(
-    MEASUREMENT_TEXT_FIELDS.map((field) => [field, z.string().max(2000).optional()]),
+    MEASUREMENT_TEXT_FIELDS.map((field) => [field, z.string().optional()]),
   ) as Record<MeasurementTextField, z.ZodOptional<z.ZodString>>,
 );
 

@@ -1,6 +1,7 @@
 /** Files and rows that must be refused: the message names row and column, and nothing is stored. */
 import { connect } from 'node:net';
 import type { AddressInfo } from 'node:net';
+import * as fc from 'fast-check';
 import { IMPORT_MAX_BYTES, IMPORT_MAX_ROWS, paths, TEMPLATE_COLUMNS } from '@/shared/contract';
 import { ImportModel } from '@/server/db/models/import';
 import { MeasurementModel } from '@/server/db/models/measurement';
@@ -325,6 +326,30 @@ describe('a row that is refused', () => {
 
     expect(counts.created).toBe(1);
   });
+});
+
+describe('any bytes at all', () => {
+  const damaged = fc
+    .record({ at: fc.nat(), remove: fc.nat({ max: 40 }), put: fc.uint8Array({ maxLength: 20 }) })
+    .map(({ at, remove, put }) => {
+      const good = Buffer.from(csvOf([{}, { side: 'left' }, { record_number: 'R-2', remarks: 'a "b"' }]));
+      const from = at % good.length;
+      return Buffer.concat([good.subarray(0, from), put, good.subarray(from + remove)]);
+    });
+
+  it('are checked without a failure on our side', async () => {
+    await fc.assert(
+      fc.asyncProperty(fc.oneof(damaged, fc.uint8Array({ maxLength: 300 })), async (bytes) => {
+        const checked = await upload(test, technician, Buffer.from(bytes));
+
+        expect(['ready', 'refused']).toContain(checked.status);
+        expect(checked.problems.map(({ code }) => code)).not.toContain('internal');
+        expect(checked.status === 'refused').toBe(checked.problems.length > 0);
+      }),
+      { numRuns: 60, endOnFailure: true },
+    );
+    await expectNothingStored();
+  }, 60_000);
 });
 
 describe('an upload that is cut off', () => {
