@@ -13,8 +13,9 @@
 import { randomFromSeed } from '../solvers/random';
 import { DegenerateDataError, TooFewValuesError } from './errors';
 import { checkCount, checkShare, checkValues } from './checks';
+import { mean, sampleVariance } from './mean-and-deviation';
 import { quantileOfSorted } from './quantile';
-import { trimCount, trimmedMean, USUAL_TRIM, winsorisedVariance } from './trimmed';
+import { trimCount, USUAL_TRIM } from './trimmed';
 import type { Interval } from './wilson-interval';
 
 export interface BootstrapOptions {
@@ -42,14 +43,13 @@ export function bootstrapTrimmedMean(
   { trim = USUAL_TRIM, ...options }: BootstrapOptions & { trim?: number },
 ): Interval {
   checkValues('bootstrap-t', values, 5);
-  const centre = trimmedMean(values, trim);
-  const standardError = trimmedStandardError(values, trim);
+  const { centre, standardError } = trimmedCentre(values, trim);
   if (standardError === 0) throw new DegenerateDataError('bootstrap-t', 'the values do not scatter');
   const distance = (sample: readonly number[]) => {
-    const off = Math.abs(trimmedMean(sample, trim) - centre);
-    const error = trimmedStandardError(sample, trim);
+    const drawn = trimmedCentre(sample, trim);
+    const off = Math.abs(drawn.centre - centre);
     // A sample that does not scatter is infinitely far off, unless it hits the centre: the cautious reading.
-    return off === 0 ? 0 : off / error;
+    return off === 0 ? 0 : off / drawn.standardError;
   };
   const sorted = resampled(values, distance, options);
   const half = quantileOfSorted(sorted, options.confidence ?? 0.95) * standardError;
@@ -59,10 +59,16 @@ export function bootstrapTrimmedMean(
   return { low: centre - half + 0, high: centre + half + 0 };
 }
 
-function trimmedStandardError(values: readonly number[], trim: number): number {
+/** Trimmed mean with its standard error from the Winsorised variance; one sort for both. */
+function trimmedCentre(values: readonly number[], trim: number): { centre: number; standardError: number } {
   const count = values.length;
-  const left = count - 2 * trimCount(count, trim);
-  return Math.sqrt(((count - 1) * winsorisedVariance(values, trim)) / (left * (left - 1)));
+  const cut = trimCount(count, trim);
+  const left = count - 2 * cut;
+  const sorted = Float64Array.from(values).sort();
+  const centre = mean(sorted.subarray(cut, count - cut));
+  sorted.fill(sorted[cut] ?? NaN, 0, cut).fill(sorted[count - 1 - cut] ?? NaN, count - cut);
+  const variance = sampleVariance(sorted);
+  return { centre, standardError: Math.sqrt(((count - 1) * variance) / (left * (left - 1))) };
 }
 
 function resampled<Item>(

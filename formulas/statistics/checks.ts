@@ -6,7 +6,10 @@ import { TooFewValuesError, UnequalLengthsError } from './errors';
 const ANY_NUMBER = { min: -Number.MAX_VALUE, max: Number.MAX_VALUE };
 const SHARE = { min: Number.MIN_VALUE, max: 1 - Number.EPSILON / 2 };
 
-export function checkValues(statistic: string, values: readonly number[], needed: number): void {
+/** A list of numbers, or a typed one. */
+export type Values = readonly number[] | Float64Array;
+
+export function checkValues(statistic: string, values: Values, needed: number): void {
   if (values.length < needed) throw new TooFewValuesError(statistic, values.length, needed);
   for (const value of values) {
     if (!Number.isFinite(value)) throw new OutOfRangeError(`${statistic}: value`, value, ANY_NUMBER);

@@ -5,7 +5,7 @@
  * Result: both standard deviations, correlation of difference and sum (positive: the first scatters more), t, degrees
  *   of freedom (n - 2) and two-sided p.
  * Outside the valid range: throws TooFewValuesError below four eyes, DegenerateDataError where difference or sum does
- *   not scatter, or lies on one line.
+ *   not scatter, where both lie on one line, or where the formulas differ in a single eye.
  * Source: Wilcox, Comparing the variances of two dependent variables, J Stat Distrib Appl 2015;2:7 [V abstract and
  *   introduction; its published program read]; Morgan, Biometrika 1939;31:13-19; Pitman, Biometrika 1939;31:9-12;
  *   Cribari-Neto, Comput Stat Data Anal 2004;45:215-233 (HC4) [M].
@@ -69,6 +69,7 @@ function slopeWithHc4(x: readonly number[], y: readonly number[]): { slope: numb
   let variance = 0;
   x.forEach((at, index) => {
     const leverage = 1 / count + (at * at) / squares; // h
+    if (leverage > 1 - 1e-9) throw new DegenerateDataError(NAME, 'the formulas differ in a single eye');
     const discount = Math.min(4, (count * leverage) / 2); // the leverages add up to 2
     const residual = (y[index] ?? NaN) - slope * at;
     variance += (at * at * residual * residual) / Math.pow(1 - leverage, discount);

@@ -10,8 +10,9 @@
  *   NumAcc4 are reproduced [N].
  */
 import { checkValues } from './checks';
+import type { Values } from './checks';
 
-export function mean(values: readonly number[]): number {
+export function mean(values: Values): number {
   checkValues('mean', values, 1);
   let sum = 0;
   for (const value of values) sum += value;
@@ -22,7 +23,7 @@ export function mean(values: readonly number[]): number {
   return rough + rest / values.length + 0;
 }
 
-export function sampleVariance(values: readonly number[]): number {
+export function sampleVariance(values: Values): number {
   checkValues('variance', values, 2);
   const centre = mean(values);
   let squares = 0;
@@ -35,6 +36,6 @@ export function sampleVariance(values: readonly number[]): number {
   return Math.max(0, (squares - (rest * rest) / values.length) / (values.length - 1));
 }
 
-export function sampleSd(values: readonly number[]): number {
+export function sampleSd(values: Values): number {
   return Math.sqrt(sampleVariance(values));
 }
