@@ -1,0 +1,55 @@
+/** A row that is chosen as a whole. Arrow keys move to its neighbours, Enter and Space choose it. */
+import type { ReactNode } from 'react';
+import { Pressable } from 'react-native';
+import type { View } from 'react-native';
+import { useTheme } from '@/shared/client/theme/theme-context';
+import { SPACE, TOUCH_PX } from '@/shared/client/theme/tokens';
+import { useFocusRing } from './focus-ring';
+
+interface RowButtonProps {
+  label: string;
+  isPressed: boolean;
+  isTabStop: boolean;
+  isDisabled: boolean;
+  onPress: () => void;
+  onStep: (step: 1 | -1) => void;
+  setElement: (element: View | null) => void;
+  children: ReactNode;
+}
+
+export function RowButton(props: RowButtonProps) {
+  const { colors } = useTheme();
+  const ring = useFocusRing();
+  const onKeyDown = (event: { key: string; preventDefault: () => void }) => {
+    const step = event.key === 'ArrowDown' ? 1 : event.key === 'ArrowUp' ? -1 : undefined;
+    if (step === undefined) return;
+    event.preventDefault();
+    props.onStep(step);
+  };
+  return (
+    <Pressable
+      ref={props.setElement}
+      role="button"
+      aria-label={props.label}
+      {...({ 'aria-pressed': props.isPressed, onKeyDown, tabIndex: props.isTabStop ? 0 : -1 } as object)}
+      disabled={props.isDisabled}
+      onPress={props.onPress}
+      onFocus={ring.onFocus}
+      onBlur={ring.onBlur}
+      style={[
+        {
+          minHeight: TOUCH_PX,
+          borderBottomWidth: 1,
+          borderBottomColor: colors.hairline,
+          borderLeftWidth: 4,
+          borderLeftColor: props.isPressed ? colors.sea : 'transparent',
+          paddingLeft: SPACE.s,
+          justifyContent: 'center',
+        },
+        { ...ring.style, outlineOffset: -3 },
+      ]}
+    >
+      {props.children}
+    </Pressable>
+  );
+}
