@@ -2,23 +2,11 @@
  * Calls to the API: bearer token from memory, one refresh for all callers that meet an expired token,
  * versions as If-Match, a key for each POST so that a repeated click is not a second act.
  */
-import { paths, sessionSchema } from '@/shared/contract';
 import type { z } from 'zod';
-import { OFFLINE, problemOf } from './problem';
-import { getSession, sessionEnded, sessionStarted } from './session-store';
-
-export interface CallOptions {
-  method?: 'GET' | 'POST' | 'PUT' | 'DELETE';
-  body?: unknown;
-  /** Multipart instead of JSON. */
-  form?: FormData;
-  version?: number;
-  idempotencyKey?: string;
-  signal?: AbortSignal;
-}
-
-/** The client's mark, asked for by the two calls that ride on the cookie. */
-const OWN_HEADER = { 'X-Landfall': '1' };
+import { problemOf, unreadable } from './problem';
+import { refreshSession } from './refresh';
+import { attempt } from './transport';
+import type { CallOptions } from './transport';
 
 /** Calls, checks the reply against its schema, and returns it. Throws ApiProblem. */
 export async function call<T extends z.ZodType>(
@@ -27,7 +15,8 @@ export async function call<T extends z.ZodType>(
   options: CallOptions = {},
 ): Promise<z.output<T>> {
   const response = await send(path, options);
-  return schema.parse(await response.json()) as z.output<T>;
+  const body: unknown = await response.json().catch(() => undefined);
+  return checked(body, schema, response.headers.get('X-Request-Id'));
 }
 
 /** Calls where only success matters. */
@@ -38,13 +27,23 @@ export async function callEmpty(path: string, options: CallOptions = {}): Promis
 /** Fetches a file with the bearer token. */
 export async function callFile(path: string): Promise<{ blob: Blob; fileName: string }> {
   const response = await send(path, {});
-  const named = /filename\*?=(?:UTF-8'')?"?([^";]+)"?/i.exec(
-    response.headers.get('Content-Disposition') ?? '',
-  );
-  return { blob: await response.blob(), fileName: decodeURIComponent(named?.[1] ?? 'download') };
+  const fileName = fileNameIn(response.headers.get('Content-Disposition') ?? '');
+  return { blob: await response.blob(), fileName };
 }
 
-async function send(path: string, options: CallOptions): Promise<Response> {
+/** A number that was read wrongly is worse than none: a reply of another shape is refused, not used in part. */
+export function checked<T extends z.ZodType>(
+  body: unknown,
+  schema: T,
+  requestId: string | null,
+): z.output<T> {
+  const parsed = schema.safeParse(body);
+  if (parsed.success) return parsed.data;
+  throw unreadable({ status: 200, requestId: requestId ?? undefined });
+}
+
+/** A refused token is renewed once and the call repeated; the sign-in paths speak for themselves. */
+export async function send(path: string, options: CallOptions): Promise<Response> {
   const first = await attempt(path, options);
   if (first.status !== 401 || path.startsWith('/api/auth/')) return accepted(first);
   const isRefreshed = await refreshSession();
@@ -57,51 +56,12 @@ async function accepted(response: Response): Promise<Response> {
   throw await problemOf(response);
 }
 
-async function attempt(path: string, options: CallOptions): Promise<Response> {
-  const session = getSession();
-  const headers: Record<string, string> = { Accept: 'application/json', ...OWN_HEADER };
-  if (session.status === 'in') headers.Authorization = `Bearer ${session.accessToken}`;
-  if (options.body !== undefined) headers['Content-Type'] = 'application/json';
-  if (options.version !== undefined) headers['If-Match'] = `"${options.version}"`;
-  if (options.idempotencyKey) headers['Idempotency-Key'] = options.idempotencyKey;
+function fileNameIn(disposition: string): string {
+  const encoded = /filename\*=UTF-8''([^;]+)/i.exec(disposition)?.[1];
+  const plain = /filename="?([^";]+)"?/i.exec(disposition)?.[1];
   try {
-    return await fetch(path, {
-      method: options.method ?? 'GET',
-      headers,
-      body: options.form ?? (options.body === undefined ? undefined : JSON.stringify(options.body)),
-      signal: options.signal,
-      credentials: 'same-origin',
-    });
-  } catch (error) {
-    if (options.signal?.aborted) throw error;
-    throw OFFLINE;
+    return decodeURIComponent(encoded ?? plain ?? 'download');
+  } catch {
+    return plain ?? 'download';
   }
-}
-
-let refreshing: Promise<boolean> | undefined;
-
-/** Renews the session from the cookie; concurrent callers share one attempt. False: signed out. */
-export function refreshSession(): Promise<boolean> {
-  refreshing ??= withTabLock(refreshOnce).finally(() => {
-    refreshing = undefined;
-  });
-  return refreshing;
-}
-
-async function refreshOnce(): Promise<boolean> {
-  const response = await attempt(paths.refresh(), { method: 'POST' });
-  if (response.ok) {
-    sessionStarted(sessionSchema.parse(await response.json()));
-    return true;
-  }
-  // Only a plain refusal ends the session: a busy or broken server does not sign anybody out.
-  if (response.status !== 401) throw await problemOf(response);
-  sessionEnded(getSession().status === 'in');
-  return false;
-}
-
-/** Tabs share one cookie: with Web Locks they take turns instead of racing for the rotation. */
-function withTabLock(work: () => Promise<boolean>): Promise<boolean> {
-  const locks = globalThis.navigator?.locks;
-  return locks ? locks.request('landfall.refresh', work) : work();
 }

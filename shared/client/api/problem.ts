@@ -1,5 +1,5 @@
 /** What can go wrong with a call, as one closed type: a problem of the server, or no answer at all. */
-import { problemSchema, PROBLEM_TYPE_PREFIX } from '@/shared/contract';
+import { problemSchema, PROBLEMS, PROBLEM_TYPE_PREFIX } from '@/shared/contract';
 import type { FieldError, ProblemCode } from '@/shared/contract';
 
 export type ApiProblemCode = ProblemCode | 'offline' | 'unreadable';
@@ -49,22 +49,29 @@ export const OFFLINE = new ApiProblem({
   detail: 'Check the connection and try again. Nothing was lost on this page.',
 });
 
+/** A reply that is not what was agreed: nothing in it is used. */
+export function unreadable({ status, requestId }: { status: number; requestId?: string }): ApiProblem {
+  const title = 'The server answered in an unexpected way';
+  return new ApiProblem({ code: 'unreadable', status, title, requestId });
+}
+
 /** Reads a problem document; anything else becomes "unreadable" with its status. */
 export async function problemOf(response: Response): Promise<ApiProblem> {
   const body: unknown = await response.json().catch(() => undefined);
+  return problemIn(response.status, body);
+}
+
+export function problemIn(status: number, body: unknown): ApiProblem {
   const parsed = problemSchema.safeParse(body);
-  if (!parsed.success) {
-    return new ApiProblem({
-      code: 'unreadable',
-      status: response.status,
-      title: 'The server answered in an unexpected way',
-    });
-  }
-  const { type, title, status, detail, instance, errors, current } = parsed.data;
-  const code = type.startsWith(PROBLEM_TYPE_PREFIX)
-    ? (type.slice(PROBLEM_TYPE_PREFIX.length) as ProblemCode)
-    : 'unreadable';
-  return new ApiProblem({ code, status, title, detail, errors, requestId: instance, current });
+  if (!parsed.success) return unreadable({ status });
+  const { type, title, detail, instance, errors, current } = parsed.data;
+  return new ApiProblem({ code: codeIn(type), status, title, detail, errors, requestId: instance, current });
+}
+
+/** A code that this page does not know yet, say from a newer server, is not taken for one that it knows. */
+function codeIn(type: string): ApiProblemCode {
+  const name = type.startsWith(PROBLEM_TYPE_PREFIX) ? type.slice(PROBLEM_TYPE_PREFIX.length) : '';
+  return Object.hasOwn(PROBLEMS, name) ? (name as ProblemCode) : 'unreadable';
 }
 
 /** Any thrown value as a problem, so that a screen has one thing to show. */

@@ -30,7 +30,8 @@ export function sessionStarted(session: Session): void {
 }
 
 export function sessionEnded(wasIdle = false): void {
-  set({ status: 'out', wasIdle });
+  // Several tabs and calls may learn of the same end; the first one knew why.
+  if (state.status !== 'out') set({ status: 'out', wasIdle });
 }
 
 export function onSessionChange(listener: () => void): () => void {

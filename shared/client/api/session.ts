@@ -1,34 +1,68 @@
-/** Acts of the session: sign in, sign out, find out at start, end when idle. */
+/** Acts of the session: sign in, sign out, find out at start; other tabs of the same browser hear of each. */
 import { paths, sessionSchema } from '@/shared/contract';
-import { call, callEmpty, refreshSession } from './client';
+import { readStored, writeStored } from '@/shared/client/lib/stored';
+import { call, callEmpty } from './client';
 import { queryClient } from './query-client';
-import { getSession, sessionEnded, sessionStarted } from './session-store';
+import { refreshSession } from './refresh';
+import { getSession, onSessionChange, sessionEnded, sessionStarted } from './session-store';
 
 /** Minutes without any act after which the session ends; the server holds the same limit. */
 export const IDLE_MINUTES = 15;
 const CHANNEL = 'landfall.session';
+/** Set while the server has not heard of a sign-out: its cookie would still open the door. */
+const UNHEARD_KEY = 'landfall.sign-out-unheard';
+
+type TabMessage = { kind: 'in'; userId: string } | { kind: 'out'; wasIdle: boolean };
 
 const channel = typeof BroadcastChannel === 'undefined' ? undefined : new BroadcastChannel(CHANNEL);
-channel?.addEventListener('message', () => {
-  queryClient.clear();
-  sessionEnded();
+channel?.addEventListener('message', ({ data }: MessageEvent<TabMessage>) => heard(data));
+const tell = (message: TabMessage) => channel?.postMessage(message);
+
+/** What belongs to one person must not be seen by the next: no reply outlives the session it came in. */
+onSessionChange(() => {
+  if (getSession().status === 'out') queryClient.clear();
 });
 
+let leaving: Promise<void> = Promise.resolve();
+
 export async function signIn(credentials: { email: string; password: string }): Promise<void> {
+  // The reply to a sign-out still under way would take the new session's cookie with it.
+  await leaving;
+  const session = await call(paths.signIn(), sessionSchema, { method: 'POST', body: credentials });
+  writeStored(UNHEARD_KEY, null);
   queryClient.clear();
-  sessionStarted(await call(paths.signIn(), sessionSchema, { method: 'POST', body: credentials }));
+  sessionStarted(session);
+  tell({ kind: 'in', userId: session.user.id });
 }
 
-/** Ends the session here, in other tabs and on the server. */
-export async function signOut(wasIdle = false): Promise<void> {
-  await callEmpty(paths.signOut(), { method: 'POST' }).catch(() => undefined);
-  queryClient.clear();
+/** Ends the session here and in other tabs at once, and on the server as soon as it hears of it. */
+export function signOut(wasIdle = false): Promise<void> {
+  writeStored(UNHEARD_KEY, '1');
   sessionEnded(wasIdle);
-  channel?.postMessage('out');
+  tell({ kind: 'out', wasIdle });
+  leaving = endOnServer().catch(() => undefined);
+  return leaving;
+}
+
+async function endOnServer(): Promise<void> {
+  await callEmpty(paths.signOut(), { method: 'POST' });
+  writeStored(UNHEARD_KEY, null);
 }
 
 /** At start: is there a session behind the cookie? A server that does not answer leaves it open. */
 export async function resumeSession(): Promise<void> {
   if (getSession().status !== 'unknown') return;
-  await refreshSession();
+  if (readStored(UNHEARD_KEY) === null) {
+    await refreshSession();
+    return;
+  }
+  await endOnServer();
+  sessionEnded();
+}
+
+/** The cookie is shared: when somebody else signs in elsewhere, this tab must not go on under the old name. */
+function heard(message: TabMessage): void {
+  const session = getSession();
+  if (message.kind === 'out') sessionEnded(message.wasIdle);
+  else if (session.status === 'in' && session.user.id !== message.userId) sessionEnded();
 }

@@ -1,7 +1,9 @@
 /** Actions. One primary per screen; dangerous ones are named in full and outlined in the stop colour. */
 import { ActivityIndicator, Pressable, View } from 'react-native';
+import type { ViewStyle } from 'react-native';
 import type { Ref } from 'react';
 import { useTheme } from '@/shared/client/theme/theme-context';
+import { useReducedMotion } from '@/shared/client/theme/use-reduced-motion';
 import { RADIUS, SPACE, TOUCH_PX } from '@/shared/client/theme/tokens';
 import type { Colours } from '@/shared/client/theme/tokens';
 import { useFocusRing } from './focus-ring';
@@ -33,42 +35,42 @@ const TONES: Record<
   plain: { fill: null, text: 'sea', border: null },
 };
 
-export function Button(props: ButtonProps) {
-  const { label, onPress, kind = 'quiet', isBusy = false, isDisabled = false } = props;
+export function Button({
+  label,
+  onPress,
+  kind = 'quiet',
+  isBusy = false,
+  isDisabled = false,
+  accessibleLabel,
+  isExpanded,
+  isPressed,
+  isWide,
+  ref,
+}: ButtonProps) {
   const { colors } = useTheme();
   const ring = useFocusRing();
   const tone = TONES[kind];
   return (
     <Pressable
-      ref={props.ref}
+      ref={ref}
       role="button"
-      aria-label={props.accessibleLabel}
+      aria-label={accessibleLabel}
       aria-busy={isBusy || undefined}
-      aria-expanded={props.isExpanded}
-      {...(props.isPressed === undefined ? {} : { 'aria-pressed': props.isPressed })}
-      disabled={isDisabled || isBusy}
-      onPress={onPress}
+      aria-expanded={isExpanded}
+      {...(isPressed === undefined ? {} : { 'aria-pressed': isPressed })}
+      // A busy button keeps the focus, which a disabled one would drop; it just does not act twice.
+      disabled={isDisabled}
+      onPress={isBusy ? undefined : onPress}
       onFocus={ring.onFocus}
       onBlur={ring.onBlur}
       style={({ pressed }) => [
-        {
-          minHeight: TOUCH_PX,
-          paddingHorizontal: kind === 'plain' ? SPACE.s : SPACE.l,
-          paddingVertical: SPACE.s,
-          borderRadius: RADIUS,
-          borderWidth: tone.border ? 1 : 0,
-          borderColor: tone.border ? colors[tone.border] : undefined,
-          backgroundColor: tone.fill ? colors[tone.fill] : 'transparent',
-          opacity: isDisabled ? 0.55 : pressed ? 0.8 : 1,
-          alignItems: 'center',
-          justifyContent: 'center',
-          alignSelf: props.isWide ? 'stretch' : 'flex-start',
-        },
+        frameStyle(kind, colors),
+        stateStyle({ isDisabled, pressed, isWide }),
         ring.style,
       ]}
     >
       <View style={{ flexDirection: 'row', gap: SPACE.s, alignItems: 'center' }}>
-        {isBusy ? <ActivityIndicator size="small" color={colors[tone.text]} /> : null}
+        {isBusy ? <BusySign colour={colors[tone.text]} /> : null}
         <Text
           variant="strong"
           color={tone.text}
@@ -79,4 +81,32 @@ export function Button(props: ButtonProps) {
       </View>
     </Pressable>
   );
+}
+
+function frameStyle(kind: ButtonKind, colors: Colours): ViewStyle {
+  const { border, fill } = TONES[kind];
+  return {
+    minHeight: TOUCH_PX,
+    paddingHorizontal: kind === 'plain' ? SPACE.s : SPACE.l,
+    paddingVertical: SPACE.s,
+    borderRadius: RADIUS,
+    borderWidth: border ? 1 : 0,
+    borderColor: border ? colors[border] : undefined,
+    backgroundColor: fill ? colors[fill] : 'transparent',
+    alignItems: 'center',
+    justifyContent: 'center',
+  };
+}
+
+function stateStyle(state: { isDisabled: boolean; pressed: boolean; isWide?: boolean }): ViewStyle {
+  return {
+    opacity: state.isDisabled ? 0.55 : state.pressed ? 0.8 : 1,
+    alignSelf: state.isWide ? 'stretch' : 'flex-start',
+  };
+}
+
+/** Turning only for those who do not mind movement. */
+function BusySign({ colour }: { colour: string }) {
+  const isStill = useReducedMotion();
+  return <ActivityIndicator size="small" color={colour} animating={!isStill} hidesWhenStopped={false} />;
 }

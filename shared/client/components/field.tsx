@@ -5,9 +5,10 @@
 import { useId, useRef } from 'react';
 import type { ReactNode, Ref } from 'react';
 import { Pressable, TextInput, View } from 'react-native';
-import type { TextInputProps } from 'react-native';
+import type { TextInputProps, TextStyle } from 'react-native';
 import { useTheme } from '@/shared/client/theme/theme-context';
 import { FONT, RADIUS, SIZE, SPACE, TOUCH_PX } from '@/shared/client/theme/tokens';
+import type { Colours } from '@/shared/client/theme/tokens';
 import { useFocusRing } from './focus-ring';
 import { Text } from './text';
 
@@ -115,25 +116,17 @@ function Input({
 }: Omit<TextFieldProps, 'ref'> & { ids: FieldIds; ref: (element: TextInput | null) => void }) {
   const { colors } = useTheme();
   const ring = useFocusRing();
-  const { type = 'text' } = props;
   return (
     <TextInput
       ref={ref}
       value={props.value}
       onChangeText={props.onChange}
       onSubmitEditing={props.onSubmit}
-      aria-labelledby={ids.labelId}
-      {...({
-        'aria-describedby': ids.describedBy,
-        'aria-invalid': props.error ? true : undefined,
-        'aria-required': props.isRequired || undefined,
-      } as object)}
+      {...described(props, ids)}
       editable={!props.isDisabled}
       multiline={props.isMultiline}
-      secureTextEntry={type === 'password'}
-      inputMode={
-        props.isNumber ? 'decimal' : type === 'email' ? 'email' : type === 'search' ? 'search' : 'text'
-      }
+      secureTextEntry={props.type === 'password'}
+      inputMode={props.isNumber ? 'decimal' : INPUT_MODES[props.type ?? 'text']}
       autoComplete={props.autoComplete ?? 'off'}
       autoCapitalize="none"
       autoCorrect={false}
@@ -146,24 +139,38 @@ function Input({
         ring.onBlur();
         props.onBlur?.();
       }}
-      style={[
-        {
-          minHeight: props.isMultiline ? TOUCH_PX * 2 : TOUCH_PX,
-          borderWidth: props.error ? 2 : 1,
-          borderColor: props.error ? colors.stop : colors.line,
-          borderRadius: RADIUS,
-          backgroundColor: colors.surface,
-          color: colors.ink,
-          paddingHorizontal: SPACE.m,
-          paddingVertical: SPACE.s,
-          fontSize: SIZE.large,
-          fontFamily: props.isNumber ? FONT.numbers : FONT.words,
-          opacity: props.isDisabled ? 0.6 : 1,
-        },
-        ring.style,
-      ]}
+      style={[inputStyle(props, colors), ring.style]}
     />
   );
+}
+
+const INPUT_MODES = { text: 'text', email: 'email', search: 'search', password: 'text' } as const;
+
+function described({ error, isRequired }: InputLook, ids: FieldIds): object {
+  return {
+    'aria-labelledby': ids.labelId,
+    'aria-describedby': ids.describedBy,
+    'aria-invalid': error ? true : undefined,
+    'aria-required': isRequired || undefined,
+  };
+}
+
+type InputLook = Pick<TextFieldProps, 'error' | 'isRequired' | 'isMultiline' | 'isNumber' | 'isDisabled'>;
+
+function inputStyle({ error, isMultiline, isNumber, isDisabled }: InputLook, colors: Colours): TextStyle {
+  return {
+    minHeight: isMultiline ? TOUCH_PX * 2 : TOUCH_PX,
+    borderWidth: error ? 2 : 1,
+    borderColor: error ? colors.stop : colors.line,
+    borderRadius: RADIUS,
+    backgroundColor: colors.surface,
+    color: colors.ink,
+    paddingHorizontal: SPACE.m,
+    paddingVertical: SPACE.s,
+    fontSize: SIZE.large,
+    fontFamily: isNumber ? FONT.numbers : FONT.words,
+    opacity: isDisabled ? 0.6 : 1,
+  };
 }
 
 /** A number typed as text: `,` and `.` both mark decimals, the typed text stays as it is. */

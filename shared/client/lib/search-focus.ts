@@ -1,9 +1,11 @@
 /** The search field of the screen in view, so that the key "/" can reach it. */
-import type { TextInput } from 'react-native';
+interface Focusable {
+  focus: () => void;
+}
 
-let field: TextInput | null = null;
+let field: Focusable | null = null;
 
-export function searchFieldRef(element: TextInput | null): void {
+export function searchFieldRef(element: Focusable | null): void {
   field = element;
 }
 

@@ -1,45 +1,46 @@
-/** Ends the session after a quarter of an hour without any act, with a minute's warning. */
-import { useEffect, useRef, useState } from 'react';
+/** Ends the session after a quarter of an hour without any act in any tab, with a minute's warning. */
+import { useEffect, useState } from 'react';
 import { IDLE_MINUTES, signOut } from '@/shared/client/api/session';
-import { refreshSession } from '@/shared/client/api/client';
+import { refreshSession } from '@/shared/client/api/refresh';
 import { Button } from '@/shared/client/components/button';
 import { Dialog } from '@/shared/client/components/dialog';
 import { Text } from '@/shared/client/components/text';
+import { createIdleClock } from '@/shared/client/lib/idle';
 
 const MINUTE_MS = 60_000;
+const RENEW_EVERY_MS = 5 * MINUTE_MS;
+const LOOK_EVERY_MS = 5_000;
 const ACTS = ['pointerdown', 'keydown', 'scroll', 'touchstart'] as const;
 
 export function IdleGuard() {
-  const lastActMs = useRef(Date.now());
-  const renewedMs = useRef(Date.now());
   const [isWarning, setIsWarning] = useState(false);
 
   useEffect(() => {
-    const onAct = () => {
-      lastActMs.current = Date.now();
-      // Somebody who reads and scrolls calls nothing; the server must learn that they are there.
-      if (Date.now() - renewedMs.current > 5 * MINUTE_MS) {
-        renewedMs.current = Date.now();
-        refreshSession().catch(() => undefined);
-      }
+    const clock = createIdleClock(IDLE_MINUTES * MINUTE_MS);
+    const renew = createRenewal();
+    const look = () => {
+      const state = clock.state();
+      if (state === 'over') void signOut(true);
+      setIsWarning(state === 'warning');
+      return state;
     };
-    const check = setInterval(() => {
-      const quietMs = Date.now() - lastActMs.current;
-      if (quietMs >= IDLE_MINUTES * MINUTE_MS) void signOut(true);
-      else setIsWarning(quietMs >= (IDLE_MINUTES - 1) * MINUTE_MS);
-    }, 5_000);
-    ACTS.forEach((act) => globalThis.addEventListener?.(act, onAct, { passive: true, capture: true }));
+    const onAct = () => {
+      // A computer that slept wakes with an act: the time it slept counts as quiet.
+      if (look() === 'over') return;
+      // The question stays open until the next look: closed now, it would take its own button from under the press.
+      clock.act();
+      renew();
+    };
+    const looking = setInterval(look, LOOK_EVERY_MS);
+    ACTS.forEach((act) => globalThis.addEventListener(act, onAct, { passive: true, capture: true }));
     return () => {
-      clearInterval(check);
-      ACTS.forEach((act) => globalThis.removeEventListener?.(act, onAct, { capture: true }));
+      clearInterval(looking);
+      ACTS.forEach((act) => globalThis.removeEventListener(act, onAct, { capture: true }));
     };
   }, []);
 
-  const stay = () => {
-    lastActMs.current = Date.now();
-    setIsWarning(false);
-    refreshSession().catch(() => undefined);
-  };
+  // Pressing the button was an act already: the clock and the server know.
+  const stay = () => setIsWarning(false);
   return (
     <Dialog
       title="Still there?"
@@ -54,4 +55,14 @@ export function IdleGuard() {
       </Text>
     </Dialog>
   );
+}
+
+/** Somebody who reads and scrolls calls nothing; the server must learn that they are there. */
+function createRenewal(): () => void {
+  let renewedMs = Date.now();
+  return () => {
+    if (Date.now() - renewedMs < RENEW_EVERY_MS) return;
+    renewedMs = Date.now();
+    refreshSession().catch(() => undefined);
+  };
 }

@@ -47,13 +47,16 @@ function Resuming() {
   const { colors } = useTheme();
   const [problem, setProblem] = useState<ApiProblem>();
   const resume = () => {
-    setProblem(undefined);
     resumeSession().catch((error: unknown) => setProblem(asProblem(error)));
+  };
+  const retry = () => {
+    setProblem(undefined);
+    resume();
   };
   useEffect(resume, []);
   return (
     <View style={{ flex: 1, padding: 24, backgroundColor: colors.paper }}>
-      {problem ? <ErrorPanel problem={problem} onRetry={resume} /> : <Loading label="Looking who is there" />}
+      {problem ? <ErrorPanel problem={problem} onRetry={retry} /> : <Loading label="Looking who is there" />}
     </View>
   );
 }
