@@ -52,7 +52,7 @@ function checkOptions(options: FormulaOptions): void {
   }
 }
 
-export function vertexOf(request: FormulaRequest): number {
+export function vertexOf(request: Pick<FormulaRequest, 'options'>): number {
   return request.options.vertexMm ?? DEFAULT_VERTEX_MM;
 }
 

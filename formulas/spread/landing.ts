@@ -60,6 +60,8 @@ export function prepareLanding(question: LandingEye): PreparedLanding {
   const vertexMm = vertexOf(request);
   const measured = opticsOf(request);
   const lens = thinLens(measured, vertexMm);
+  const scale = question.spread.scale ?? 1;
+  checkRange('spread.scale', scale, SCALE_RANGE);
   const parts = question.spread.parts.map((part) => ({
     source: part.source,
     sdAt: partSd({ request, measured, lens, vertexMm }, part),
@@ -70,7 +72,7 @@ export function prepareLanding(question: LandingEye): PreparedLanding {
       const meanD = finite('refractionD', refractionWithPower(lens, powerD));
       return landingOf(
         meanD,
-        parts.map(({ source, sdAt }) => ({ source, sdD: finite('sdD', sdAt(powerD)) })),
+        parts.map(({ source, sdAt }) => ({ source, sdD: finite('sdD', scale * sdAt(powerD)) })),
         measured.notices,
       );
     },
@@ -120,6 +122,7 @@ function partSd(propagation: Propagation, part: SpreadPart): (powerD: number) =>
 }
 
 const SD_RANGE = { min: 0, max: 10 };
+const SCALE_RANGE = { min: 0.1, max: 10 };
 
 function powerSdD(lens: ThinLens, powerD: number, sdD: number): number {
   return Math.abs(refractionWithPower(lens, powerD - sdD) - refractionWithPower(lens, powerD + sdD)) / 2;

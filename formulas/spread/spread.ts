@@ -29,4 +29,6 @@ export interface SpreadPart {
 
 export interface Spread {
   parts: readonly SpreadPart[];
+  /** Every part is wider by this factor, from own results; 1 when absent. */
+  scale?: number;
 }
