@@ -2,7 +2,7 @@
  * What every journey shares: a page that fails the test on any content-security violation or uncaught
  * error, sign-in as a demo role, and the accessibility check.
  */
-import AxeBuilder from '@axe-core/playwright';
+import { AxeBuilder } from '@axe-core/playwright';
 import { test as base, expect } from '@playwright/test';
 import type { Page } from '@playwright/test';
 import type { Practice, Role } from '@/shared/contract';
@@ -10,13 +10,13 @@ import type { Practice, Role } from '@/shared/contract';
 export { expect };
 
 export const test = base.extend<{ page: Page }>({
-  page: async ({ page }, use) => {
+  page: async ({ page }, provide) => {
     const complaints: string[] = [];
     page.on('console', (message) => {
       if (/content security policy/i.test(message.text())) complaints.push(message.text());
     });
     page.on('pageerror', (error) => complaints.push(String(error)));
-    await use(page);
+    await provide(page);
     expect(complaints).toEqual([]);
   },
 });

@@ -65,7 +65,7 @@ function Radios<T extends string>({
   return (
     <View
       role="radiogroup"
-      aria-labelledby={ids.labelId}
+      aria-labelledby={ids.labelledBy}
       {...({ 'aria-describedby': ids.describedBy } as object)}
       style={{
         flexDirection: isStacked ? 'column' : 'row',

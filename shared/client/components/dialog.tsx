@@ -2,7 +2,7 @@
  * A question that must be answered first. Focus is kept inside, Escape closes, focus returns to the opener
  * (react-native-web's Modal does that); the first focus goes to the least dangerous action.
  */
-import { useId } from 'react';
+import { useId, useRef } from 'react';
 import type { ReactNode } from 'react';
 import { Modal, ScrollView, View } from 'react-native';
 import { useLayout, useTheme } from '@/shared/client/theme/theme-context';
@@ -24,12 +24,16 @@ export function Dialog({ title, isOpen, onClose, children, actions, cancelLabel 
   const { colors } = useTheme();
   const { isPhone } = useLayout();
   const titleId = useId();
+  const cancel = useRef<View>(null);
+  // Not before the modal shows: it first notes where the focus came from, to give it back there.
+  const focusCancel = () => (cancel.current as { focus?: () => void } | null)?.focus?.();
   return (
     <Modal
       visible={isOpen}
       transparent
       animationType="none"
       onRequestClose={onClose}
+      onShow={focusCancel}
       {...({ 'aria-labelledby': titleId } as object)}
     >
       <View
@@ -62,7 +66,7 @@ export function Dialog({ title, isOpen, onClose, children, actions, cancelLabel 
             {children}
           </ScrollView>
           <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: SPACE.m, justifyContent: 'flex-end' }}>
-            <Button label={cancelLabel} onPress={onClose} />
+            <Button ref={cancel} label={cancelLabel} onPress={onClose} />
             {actions}
           </View>
         </View>

@@ -13,7 +13,7 @@ import { useFocusRing } from './focus-ring';
 import { Text } from './text';
 
 export interface FieldIds {
-  labelId: string;
+  labelledBy: string;
   describedBy: string | undefined;
 }
 
@@ -37,7 +37,9 @@ export function FieldFrame({
   children,
 }: FieldFrameProps) {
   const id = useId();
-  const ids = { label: `${id}-label`, hint: `${id}-hint`, error: `${id}-error` };
+  const ids = { label: `${id}-label`, unit: `${id}-unit`, hint: `${id}-hint`, error: `${id}-error` };
+  // The unit is part of the name: who only hears the field must not have to guess millimetres.
+  const labelledBy = unit ? `${ids.label} ${ids.unit}` : ids.label;
   const describedBy = [hint ? ids.hint : '', error ? ids.error : ''].filter(Boolean).join(' ') || undefined;
   return (
     <View style={{ gap: SPACE.xs, minWidth: 0 }}>
@@ -49,7 +51,7 @@ export function FieldFrame({
         <Text variant="strong" id={ids.label}>
           {label}
         </Text>
-        {unit ? <Text color="ink2">{`(${unit})`}</Text> : null}
+        {unit ? <Text color="ink2" id={ids.unit}>{`(${unit})`}</Text> : null}
         {isRequired ? null : <Text color="ink2">optional</Text>}
       </Pressable>
       {hint ? (
@@ -57,7 +59,7 @@ export function FieldFrame({
           {hint}
         </Text>
       ) : null}
-      {children({ labelId: ids.label, describedBy })}
+      {children({ labelledBy, describedBy })}
       {error ? (
         <Text variant="small" color="stop" id={ids.error}>
           {`▪ ${error}`}
@@ -148,7 +150,7 @@ const INPUT_MODES = { text: 'text', email: 'email', search: 'search', password: 
 
 function described({ error, isRequired }: InputLook, ids: FieldIds): object {
   return {
-    'aria-labelledby': ids.labelId,
+    'aria-labelledby': ids.labelledBy,
     'aria-describedby': ids.describedBy,
     'aria-invalid': error ? true : undefined,
     'aria-required': isRequired || undefined,

@@ -17,23 +17,32 @@ interface RowButtonProps {
   children: ReactNode;
 }
 
-export function RowButton(props: RowButtonProps) {
+export function RowButton({
+  label,
+  isPressed,
+  isTabStop,
+  isDisabled,
+  onPress,
+  onStep,
+  setElement,
+  children,
+}: RowButtonProps) {
   const { colors } = useTheme();
   const ring = useFocusRing();
   const onKeyDown = (event: { key: string; preventDefault: () => void }) => {
     const step = event.key === 'ArrowDown' ? 1 : event.key === 'ArrowUp' ? -1 : undefined;
     if (step === undefined) return;
     event.preventDefault();
-    props.onStep(step);
+    onStep(step);
   };
   return (
     <Pressable
-      ref={props.setElement}
+      ref={setElement}
       role="button"
-      aria-label={props.label}
-      {...({ 'aria-pressed': props.isPressed, onKeyDown, tabIndex: props.isTabStop ? 0 : -1 } as object)}
-      disabled={props.isDisabled}
-      onPress={props.onPress}
+      aria-label={label}
+      {...({ 'aria-pressed': isPressed, onKeyDown, tabIndex: isTabStop ? 0 : -1 } as object)}
+      disabled={isDisabled}
+      onPress={onPress}
       onFocus={ring.onFocus}
       onBlur={ring.onBlur}
       style={[
@@ -42,14 +51,14 @@ export function RowButton(props: RowButtonProps) {
           borderBottomWidth: 1,
           borderBottomColor: colors.hairline,
           borderLeftWidth: 4,
-          borderLeftColor: props.isPressed ? colors.sea : 'transparent',
+          borderLeftColor: isPressed ? colors.sea : 'transparent',
           paddingLeft: SPACE.s,
           justifyContent: 'center',
         },
         { ...ring.style, outlineOffset: -3 },
       ]}
     >
-      {props.children}
+      {children}
     </Pressable>
   );
 }

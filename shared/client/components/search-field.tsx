@@ -15,7 +15,9 @@ const REST_MS = 300;
 export function SearchField({ label, value, onSearch, hint }: SearchFieldProps) {
   const [text, setText] = useState(value);
   const search = useRef(onSearch);
-  search.current = onSearch;
+  useEffect(() => {
+    search.current = onSearch;
+  }, [onSearch]);
   useEffect(() => {
     if (text === value) return undefined;
     const timer = setTimeout(() => search.current(text), REST_MS);

@@ -1,28 +1,31 @@
 /** The browser's own select: one of many, with typing ahead and the phone's own wheel. */
-import { createElement } from 'react';
+import { createElement, useRef } from 'react';
 import { FieldFrame } from './field';
 import { useFocusRing } from './focus-ring';
-import type { SelectProps } from './select';
+import type { SelectProps } from './select-props';
 import { useTheme } from '@/shared/client/theme/theme-context';
 import { FONT, RADIUS, SIZE, SPACE, TOUCH_PX } from '@/shared/client/theme/tokens';
 
 export function Select<T extends string>(props: SelectProps<T>) {
   const { colors } = useTheme();
   const ring = useFocusRing();
+  const element = useRef<HTMLSelectElement>(null);
   return (
     <FieldFrame
       label={props.label}
       hint={props.hint}
       error={props.error}
       isRequired={props.isRequired ?? true}
+      onPressLabel={() => element.current?.focus()}
     >
       {(ids) =>
         createElement(
           'select',
           {
+            ref: element,
             value: props.value,
             disabled: props.isDisabled,
-            'aria-labelledby': ids.labelId,
+            'aria-labelledby': ids.labelledBy,
             'aria-describedby': ids.describedBy,
             onChange: (event: { target: { value: string } }) => props.onChange(event.target.value as T),
             onFocus: ring.onFocus,

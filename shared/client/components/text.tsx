@@ -64,7 +64,7 @@ export function Text({
           fontFamily: family,
           textAlign: align,
         },
-        isFocusable ? ({ outlineWidth: 0 } as TextStyle) : null,
+        isFocusable ? ({ outlineStyle: 'none' } as unknown as TextStyle) : null,
         style,
       ]}
     />

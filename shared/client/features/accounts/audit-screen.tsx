@@ -2,12 +2,12 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import type { AuditEntry } from '@/shared/contract';
-import { asProblem } from '@/shared/client/api/problem';
 import { Button } from '@/shared/client/components/button';
 import { Row } from '@/shared/client/components/card';
+import { QueryView } from '@/shared/client/components/query-view';
 import { Select } from '@/shared/client/components/select';
 import { Screen } from '@/shared/client/components/screen';
-import { EmptyState, ErrorPanel, Loading } from '@/shared/client/components/states';
+import { EmptyState } from '@/shared/client/components/states';
 import { DataTable } from '@/shared/client/components/table';
 import type { Column } from '@/shared/client/components/table';
 import { formatInstant } from '@/shared/client/lib/format';
@@ -48,21 +48,20 @@ export function AuditScreen() {
           setCursors([]);
         }}
       />
-      {audit.isPending ? <Loading lines={8} /> : null}
-      {audit.error ? (
-        <ErrorPanel problem={asProblem(audit.error)} onRetry={() => void audit.refetch()} />
-      ) : null}
-      {audit.data?.items.length === 0 ? (
-        <EmptyState title="Nothing here" hint="Entries appear as people work." />
-      ) : null}
-      {audit.data && audit.data.items.length > 0 ? (
-        <DataTable
-          label="Audit entries"
-          columns={COLUMNS}
-          items={audit.data.items}
-          keyOf={(entry) => String(entry.id)}
-        />
-      ) : null}
+      <QueryView query={audit} lines={8}>
+        {({ items }) =>
+          items.length === 0 ? (
+            <EmptyState title="Nothing here" hint="Entries appear as people work." />
+          ) : (
+            <DataTable
+              label="Audit entries"
+              columns={COLUMNS}
+              items={items}
+              keyOf={(entry) => String(entry.id)}
+            />
+          )
+        }
+      </QueryView>
       <Row>
         {cursors.length > 0 ? (
           <Button label="Newer" onPress={() => setCursors(cursors.slice(0, -1))} />

@@ -8,7 +8,7 @@ import {
   LENS_KIND_NAMES,
   LENS_KINDS,
 } from '@/shared/contract';
-import type { LensInput } from '@/shared/contract';
+import type { ConstantOrigin, LensInput } from '@/shared/contract';
 import type { ApiProblem } from '@/shared/client/api/problem';
 import { Button } from '@/shared/client/components/button';
 import { Card, Row } from '@/shared/client/components/card';
@@ -20,7 +20,7 @@ import { Text } from '@/shared/client/components/text';
 import { SPACE } from '@/shared/client/theme/tokens';
 import { ConstantLine } from './constant-line';
 import { readLensForm } from './lens-form-values';
-import type { LensFormValues, RangeText } from './lens-form-values';
+import type { ConstantText, LensFormValues, RangeText } from './lens-form-values';
 
 interface LensFormProps {
   initial: LensFormValues;
@@ -122,31 +122,46 @@ export function LensForm({ initial, isBusy, isReadOnly, problem, onSave }: LensF
         />
       </Card>
       {CONSTANT_ORIGINS.map((origin) => (
-        <Card key={origin} title={ORIGIN_TITLES[origin]}>
-          <Text color="ink2">
-            Optical and ultrasound constants are never mixed. A formula without constants here is silent for
-            such eyes.
-          </Text>
-          {form.constants.map((line, index) =>
-            line.origin === origin ? (
-              <ConstantLine
-                key={line.formula}
-                line={line}
-                isReadOnly={isReadOnly}
-                onChange={(part) =>
-                  change({
-                    constants: form.constants.map((other, i) =>
-                      i === index ? { ...other, ...part } : other,
-                    ),
-                  })
-                }
-              />
-            ) : null,
-          )}
-        </Card>
+        <ConstantsCard
+          key={origin}
+          origin={origin}
+          lines={form.constants}
+          isReadOnly={isReadOnly}
+          onChange={(constants) => change({ constants })}
+        />
       ))}
       {isReadOnly ? null : <Button label="Save the model" kind="primary" isBusy={isBusy} onPress={submit} />}
     </View>
+  );
+}
+
+interface ConstantsCardProps {
+  origin: ConstantOrigin;
+  lines: readonly ConstantText[];
+  isReadOnly: boolean;
+  onChange: (lines: ConstantText[]) => void;
+}
+
+function ConstantsCard({ origin, lines, isReadOnly, onChange }: ConstantsCardProps) {
+  return (
+    <Card title={ORIGIN_TITLES[origin]}>
+      <Text color="ink2">
+        Optical and ultrasound constants are never mixed. A formula without constants here is silent for such
+        eyes.
+      </Text>
+      {lines.map((line, index) =>
+        line.origin === origin ? (
+          <ConstantLine
+            key={line.formula}
+            line={line}
+            isReadOnly={isReadOnly}
+            onChange={(part) =>
+              onChange(lines.map((other, i) => (i === index ? { ...other, ...part } : other)))
+            }
+          />
+        ) : null,
+      )}
+    </Card>
   );
 }
 

@@ -8,14 +8,14 @@ import {
   LENS_KIND_NAMES,
 } from '@/shared/contract';
 import type { Lens } from '@/shared/contract';
-import { asProblem } from '@/shared/client/api/problem';
 import { useUser } from '@/shared/client/api/session-store';
 import { Row } from '@/shared/client/components/card';
 import { TextField } from '@/shared/client/components/field';
 import { Link } from '@/shared/client/components/link';
 import { Tag } from '@/shared/client/components/mark';
+import { QueryView } from '@/shared/client/components/query-view';
 import { Screen } from '@/shared/client/components/screen';
-import { EmptyState, ErrorPanel, Loading } from '@/shared/client/components/states';
+import { EmptyState } from '@/shared/client/components/states';
 import { DataTable } from '@/shared/client/components/table';
 import type { Column } from '@/shared/client/components/table';
 import { formatPower } from '@/shared/client/lib/format';
@@ -40,21 +40,12 @@ export function LensesScreen() {
   const user = useUser();
   const [search, setSearch] = useState('');
   const lenses = useQuery(lensesQuery());
-  const shown = lenses.data?.items.filter((lens) =>
-    lens.name.toLowerCase().includes(search.trim().toLowerCase()),
-  );
   const canWrite = hasPermission(user.roles, 'lens.write');
-  const actions = (
-    <Row>
-      <Link href="/lenses/import" label="Import a CSV" kind="button" />
-      <Link href="/lenses/new" label="Add a model" kind="primary" />
-    </Row>
-  );
   return (
     <Screen
       title="Lenses"
       lead="Models, their powers, and constants per formula with where they come from"
-      action={canWrite ? actions : undefined}
+      action={canWrite ? <CatalogueActions /> : undefined}
     >
       <TextField
         label="Find a model"
@@ -64,33 +55,45 @@ export function LensesScreen() {
         ref={searchFieldRef}
         isRequired
       />
-      {lenses.isPending ? <Loading lines={6} /> : null}
-      {lenses.error ? (
-        <ErrorPanel problem={asProblem(lenses.error)} onRetry={() => void lenses.refetch()} />
-      ) : null}
-      {shown?.length === 0 ? (
-        <EmptyState
-          title={search ? 'No model of this name' : 'The catalogue is empty'}
-          hint={
-            search
-              ? 'Try a part of the name.'
-              : 'The administrator adds models by form or CSV; a plan needs at least one with constants.'
-          }
-        />
-      ) : null}
-      {shown && shown.length > 0 ? (
-        <DataTable
-          label="Lens models"
-          columns={COLUMNS}
-          items={shown}
-          keyOf={(lens) => lens.id}
-          linkOf={(lens) => ({
-            href: { pathname: '/lenses/[lensId]', params: { lensId: lens.id } },
-            label: lens.name,
-          })}
-        />
-      ) : null}
+      <QueryView query={lenses}>
+        {({ items }) => <LensList lenses={items} search={search.trim()} />}
+      </QueryView>
     </Screen>
+  );
+}
+
+function CatalogueActions() {
+  return (
+    <Row>
+      <Link href="/lenses/import" label="Import a CSV" kind="button" />
+      <Link href="/lenses/new" label="Add a model" kind="primary" />
+    </Row>
+  );
+}
+
+function LensList({ lenses, search }: { lenses: readonly Lens[]; search: string }) {
+  const shown = lenses.filter((lens) => lens.name.toLowerCase().includes(search.toLowerCase()));
+  if (shown.length === 0 && search)
+    return <EmptyState title="No model of this name" hint="Try a part of the name." />;
+  if (shown.length === 0) {
+    return (
+      <EmptyState
+        title="The catalogue is empty"
+        hint="The administrator adds models by form or CSV; a plan needs at least one with constants."
+      />
+    );
+  }
+  return (
+    <DataTable
+      label="Lens models"
+      columns={COLUMNS}
+      items={shown}
+      keyOf={(lens) => lens.id}
+      linkOf={(lens) => ({
+        href: { pathname: '/lenses/[lensId]', params: { lensId: lens.id } },
+        label: lens.name,
+      })}
+    />
   );
 }
 

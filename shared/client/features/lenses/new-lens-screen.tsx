@@ -11,7 +11,7 @@ import { LensForm } from './lens-form';
 import { emptyLens } from './lens-form-values';
 
 export function NewLensScreen() {
-  const initial = useMemo(emptyLens, []);
+  const initial = useMemo(() => emptyLens(), []);
   const save = useMutation({
     mutationFn: (input: LensInput) => call(paths.lenses(), lensSchema, { method: 'POST', body: input }),
     onSuccess: async () => {

@@ -2,10 +2,10 @@
 import { useLocalSearchParams } from 'expo-router';
 import { useQuery } from '@tanstack/react-query';
 import type { PlanDesk } from '@/shared/contract';
-import { asProblem } from '@/shared/client/api/problem';
 import { PatientStrip } from '@/shared/client/components/patient-strip';
+import { QueryView } from '@/shared/client/components/query-view';
 import { Screen } from '@/shared/client/components/screen';
-import { EmptyState, ErrorPanel, Loading } from '@/shared/client/components/states';
+import { EmptyState } from '@/shared/client/components/states';
 import { formatDate } from '@/shared/client/lib/format';
 import { DraftDesk } from './draft-desk';
 import { SignedPlan } from './signed-plan';
@@ -30,19 +30,28 @@ export function PlanDeskScreen() {
       strip={desk ? <PatientStrip patient={desk.patient} side={desk.plan.side} /> : undefined}
       width="full"
     >
-      {query.isPending ? <Loading lines={8} label="Calculating" /> : null}
-      {query.error ? (
-        <ErrorPanel problem={asProblem(query.error)} onRetry={() => void query.refetch()} />
-      ) : null}
-      {desk?.plan.status === 'draft' ? <DraftDesk desk={desk} /> : null}
-      {desk?.plan.status === 'discarded' ? (
-        <EmptyState title="This draft was discarded" hint="Start a new plan on the eye's page." />
-      ) : null}
-      {desk && (desk.plan.status === 'signed' || desk.plan.status === 'replaced') ? (
-        <SignedPlan desk={desk} />
-      ) : null}
+      <QueryView query={query} lines={8} label="Calculating">
+        {(loaded) => <DeskOf desk={loaded} />}
+      </QueryView>
     </Screen>
   );
+}
+
+function headOf(desk: PlanDesk) {
+  const { patientId, side, sequence } = desk.plan;
+  return {
+    title: `Plan ${sequence}, ${side} eye`,
+    lead: leadOf(desk),
+    back: { pathname: '/patients/[patientId]/[side]', params: { patientId, side } } as const,
+    strip: <PatientStrip patient={desk.patient} side={side} />,
+  };
+}
+
+function DeskOf({ desk }: { desk: PlanDesk }) {
+  if (desk.plan.status === 'draft') return <DraftDesk desk={desk} />;
+  if (desk.plan.status === 'discarded')
+    return <EmptyState title="This draft was discarded" hint="Start a new plan on the eye's page." />;
+  return <SignedPlan desk={desk} />;
 }
 
 function leadOf({ plan }: PlanDesk): string {

@@ -3,15 +3,14 @@ import { router, useLocalSearchParams } from 'expo-router';
 import { useQuery } from '@tanstack/react-query';
 import { hasPermission } from '@/shared/contract';
 import type { PlanListItem } from '@/shared/contract';
-import { asProblem } from '@/shared/client/api/problem';
 import { useUser } from '@/shared/client/api/session-store';
 import { Button } from '@/shared/client/components/button';
-import { Row } from '@/shared/client/components/card';
 import { RadioGroup } from '@/shared/client/components/choices';
 import { Mark, Tag } from '@/shared/client/components/mark';
+import { QueryView } from '@/shared/client/components/query-view';
 import { SearchField } from '@/shared/client/components/search-field';
 import { Screen } from '@/shared/client/components/screen';
-import { EmptyState, ErrorPanel, Loading } from '@/shared/client/components/states';
+import { EmptyState } from '@/shared/client/components/states';
 import { DataTable } from '@/shared/client/components/table';
 import type { Column } from '@/shared/client/components/table';
 import { formatDate, sideWords } from '@/shared/client/lib/format';
@@ -45,19 +44,12 @@ const COLUMNS: Column<PlanListItem>[] = [
 
 export function PlansScreen() {
   const { roles } = useUser();
-  const params = useLocalSearchParams<{ status?: string; search?: string; after?: string }>();
-  const status: Status = STATUSES.find((option) => option.value === params.status)?.value ?? 'signed';
-  const search = params.search ?? '';
-  const query = new URLSearchParams({
-    status,
-    ...(search ? { search } : {}),
-    ...(params.after ? { after: params.after } : {}),
-  }).toString();
-  const plans = useQuery(plansQuery(query));
+  const { status, search, after } = useListState();
+  const given = Object.entries({ status, search, after }).filter(([, value]) => value);
+  const plans = useQuery(plansQuery(new URLSearchParams(given).toString()));
   const options = hasPermission(roles, 'plan.write')
     ? STATUSES
     : STATUSES.filter((option) => option.value !== 'draft');
-  const next = plans.data?.next;
   return (
     <Screen title="Plans" lead="Which lens for which eye, and who signed it" width="full">
       <SearchField
@@ -71,30 +63,45 @@ export function PlansScreen() {
         value={status}
         onChange={(value) => router.setParams({ status: value, after: undefined })}
       />
-      {plans.isPending ? <Loading lines={6} /> : null}
-      {plans.error ? (
-        <ErrorPanel problem={asProblem(plans.error)} onRetry={() => void plans.refetch()} />
-      ) : null}
-      {plans.data?.items.length === 0 ? (
-        <EmptyState
-          title={search ? 'No plan of such a patient' : 'No plans here yet'}
-          hint="A surgeon starts a plan on the page of an eye and signs it there."
-        />
-      ) : null}
-      {plans.data && plans.data.items.length > 0 ? (
-        <DataTable
-          label="Plans"
-          columns={COLUMNS}
-          items={plans.data.items}
-          keyOf={(plan) => plan.id}
-          linkOf={(plan) => ({
-            href: { pathname: '/plans/[planId]', params: { planId: plan.id } },
-            label: plan.patientName,
-          })}
-        />
-      ) : null}
-      <Row>{next ? <Button label="More" onPress={() => router.setParams({ after: next })} /> : null}</Row>
+      <QueryView query={plans}>
+        {({ items, next }) => (
+          <>
+            <PlanList plans={items} search={search} />
+            {next ? <Button label="Older plans" onPress={() => router.setParams({ after: next })} /> : null}
+          </>
+        )}
+      </QueryView>
     </Screen>
+  );
+}
+
+/** List state lives in the address, so that Back and a link sent to a colleague show the same list. */
+function useListState(): { status: Status; search: string; after: string } {
+  const params = useLocalSearchParams<{ status?: string; search?: string; after?: string }>();
+  const status = STATUSES.find((option) => option.value === params.status)?.value ?? 'signed';
+  return { status, search: params.search ?? '', after: params.after ?? '' };
+}
+
+function PlanList({ plans, search }: { plans: readonly PlanListItem[]; search: string }) {
+  if (plans.length === 0) {
+    return (
+      <EmptyState
+        title={search ? 'No plan of such a patient' : 'No plans here yet'}
+        hint="A surgeon starts a plan on the page of an eye and signs it there."
+      />
+    );
+  }
+  return (
+    <DataTable
+      label="Plans"
+      columns={COLUMNS}
+      items={plans}
+      keyOf={(plan) => plan.id}
+      linkOf={(plan) => ({
+        href: { pathname: '/plans/[planId]', params: { planId: plan.id } },
+        label: plan.patientName,
+      })}
+    />
   );
 }
 

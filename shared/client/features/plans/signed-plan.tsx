@@ -27,10 +27,7 @@ import { useStartPlan } from './use-plans';
 
 export function SignedPlan({ desk }: { desk: PlanDesk }) {
   const { isWide } = useLayout();
-  const { plan, calculation } = desk;
-  const model = calculation.models.find((candidate) => candidate.lensId === plan.choice?.lensId);
-  const candidate = model?.candidates.find((row) => row.powerD === plan.choice?.powerD);
-  const lens = desk.lenses.find((other) => other.id === plan.choice?.lensId);
+  const { plan } = desk;
   return (
     <>
       {plan.outOfDateReasons.length > 0 ? <OutOfDate reasons={plan.outOfDateReasons} /> : null}
@@ -38,45 +35,58 @@ export function SignedPlan({ desk }: { desk: PlanDesk }) {
         <View style={{ flex: isWide ? 1 : undefined, minWidth: 0, gap: SPACE.l }}>
           <Card tone="sea" label="Signed choice">
             <SideWords side={plan.side} variant="title" />
-            <ChosenLens desk={desk} models={calculation.models} />
+            <ChosenLens desk={desk} models={desk.calculation.models} />
             <PlanActions desk={desk} />
           </Card>
-          {model && candidate ? (
-            <Card title="How it was calculated">
-              <CandidateDetail
-                model={model}
-                candidate={candidate}
-                stepD={powerStepD(lens, candidate.powerD)}
-              />
-            </Card>
-          ) : null}
-          {calculation.flags.length > 0 ? (
-            <Card title="Flags when it was signed">
-              <FlagList flags={calculation.flags} />
-            </Card>
-          ) : null}
+          <SignedCalculation desk={desk} />
         </View>
         <View style={isWide ? { width: 360, gap: SPACE.l } : { gap: SPACE.l }}>
           <EyeInputs desk={desk} />
-          <Card title="Signature">
-            <Facts
-              items={[
-                { label: 'Signed by', value: plan.signedBy ?? '—' },
-                { label: 'At', value: formatInstant(plan.signedAt) },
-                { label: 'Plan number', value: String(plan.sequence), isNumber: true },
-                { label: 'Note', value: plan.input.note || '—' },
-              ]}
-            />
-            <Text variant="small" color="ink2">
-              Digest of everything signed:
-            </Text>
-            <Text variant="small" isNumber style={{ overflowWrap: 'anywhere' } as object}>
-              {plan.digest ?? '—'}
-            </Text>
-          </Card>
+          <SignatureFacts desk={desk} />
         </View>
       </View>
     </>
+  );
+}
+
+function SignedCalculation({ desk: { plan, calculation, lenses } }: { desk: PlanDesk }) {
+  const model = calculation.models.find((candidate) => candidate.lensId === plan.choice?.lensId);
+  const candidate = model?.candidates.find((row) => row.powerD === plan.choice?.powerD);
+  const lens = lenses.find((other) => other.id === plan.choice?.lensId);
+  return (
+    <>
+      {model && candidate ? (
+        <Card title="How it was calculated">
+          <CandidateDetail model={model} candidate={candidate} stepD={powerStepD(lens, candidate.powerD)} />
+        </Card>
+      ) : null}
+      {calculation.flags.length > 0 ? (
+        <Card title="Flags when it was signed">
+          <FlagList flags={calculation.flags} />
+        </Card>
+      ) : null}
+    </>
+  );
+}
+
+function SignatureFacts({ desk: { plan } }: { desk: PlanDesk }) {
+  return (
+    <Card title="Signature">
+      <Facts
+        items={[
+          { label: 'Signed by', value: plan.signedBy ?? '—' },
+          { label: 'At', value: formatInstant(plan.signedAt) },
+          { label: 'Plan number', value: String(plan.sequence), isNumber: true },
+          { label: 'Note', value: plan.input.note || '—' },
+        ]}
+      />
+      <Text variant="small" color="ink2">
+        Digest of everything signed:
+      </Text>
+      <Text variant="small" isNumber style={{ overflowWrap: 'anywhere' } as object}>
+        {plan.digest ?? '—'}
+      </Text>
+    </Card>
   );
 }
 
