@@ -2,6 +2,7 @@
 import type { Home, Permission } from '@/shared/contract';
 import type { Actor } from '@/server/act';
 import { invitedAccountsSection } from '@/server/features/accounts/account-home';
+import { readyImportsSection } from '@/server/features/imports/import-home';
 
 export type HomeSection = Home['sections'][number];
 
@@ -11,5 +12,6 @@ export interface HomeSource {
 }
 
 export const HOME_SOURCES: readonly HomeSource[] = [
+  { permission: 'measurement.write', load: readyImportsSection },
   { permission: 'account.manage', load: invitedAccountsSection },
 ];

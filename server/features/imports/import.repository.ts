@@ -65,6 +65,19 @@ export async function listImportsAfter(
   return toImports(rows, undefined);
 }
 
+/** Imports that wait for somebody's decision, newest first. */
+export async function listReady(): Promise<StoredImport[]> {
+  const rows = await ImportModel.findAll({
+    attributes: WITHOUT_BYTES,
+    where: { status: 'ready' },
+    order: [
+      ['uploadedAt', 'DESC'],
+      ['id', 'DESC'],
+    ],
+  });
+  return toImports(rows, undefined);
+}
+
 export interface ImportChange {
   status: BiometryImport['status'];
   /** Account id. */

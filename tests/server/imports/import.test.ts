@@ -358,6 +358,30 @@ describe('the file itself', () => {
   });
 });
 
+describe('home', () => {
+  it('shows the technician what waits to be stored, and nobody else', async () => {
+    const { id } = await upload(test, technician, csvOf([{}, { side: 'x' }]), 'waiting.csv');
+    const sectionOf = async (person: SignedIn) =>
+      (await person.get(paths.home())).body.sections.find(
+        (section: { id: string }) => section.id === 'ready-imports',
+      );
+
+    expect(await sectionOf(technician)).toMatchObject({
+      total: 1,
+      items: [
+        {
+          title: 'waiting.csv',
+          detail: `1 to create, 1 refused; uploaded by ${technician.displayName}`,
+          href: `/imports/${id}`,
+        },
+      ],
+    });
+    expect(await sectionOf(surgeon)).toBeUndefined();
+    await confirm(test, technician, id);
+    expect((await sectionOf(technician)).total).toBe(0);
+  });
+});
+
 describe('after the process ended in the middle', () => {
   it('checks anew what was being checked, and makes ready what was being stored', async () => {
     const checking = await upload(test, technician, csvOf([{}]));
