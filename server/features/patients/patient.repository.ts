@@ -93,6 +93,16 @@ export async function countPatients(terms: readonly SearchTerm[]): Promise<numbe
   return PatientModel.count({ where: { [Op.and]: terms.map(matches) } });
 }
 
+/** People born on that day whose folded name begins so; few, and the caller looks closer. */
+export async function listWithNameAndBirthDate(
+  { namePrefix, birthDate }: { namePrefix: string; birthDate: string },
+  transaction: Transaction,
+): Promise<Patient[]> {
+  const hasPrefix = where(fn('instr', col('search_key'), namePrefix), 1);
+  const rows = await PatientModel.findAll({ where: { [Op.and]: [{ birthDate }, hasPrefix] }, transaction });
+  return rows.map(toPatient);
+}
+
 export async function listPatientsByRecordNumber(
   recordNumbers: readonly string[],
   transaction?: Transaction,

@@ -26,9 +26,9 @@ import {
   countPatients,
   findPatientByRecordNumber,
   listPatientsAfter,
-  listPatientsByBirthDate,
+  listWithNameAndBirthDate,
 } from './patient.repository';
-import { identityKeyOf, searchTerms } from './search';
+import { foldText, identityKeyOf, searchTerms } from './search';
 
 export interface PatientQuery {
   search?: string;
@@ -114,8 +114,9 @@ async function refuseTakenRecordNumber(act: Act, { recordNumber }: PatientInput)
 async function toDetail(act: Act, patient: Patient): Promise<PatientDetail> {
   const today = localDateOf(new Date(act.at));
   const [item] = await withStages([patient], today, act.transaction);
-  const sameDate = await listPatientsByBirthDate([patient.birthDate], act.transaction);
-  const possibleDuplicates = sameDate
+  const namePrefix = foldText(`${patient.familyName} ${patient.givenName}`);
+  const alike = await listWithNameAndBirthDate({ namePrefix, birthDate: patient.birthDate }, act.transaction);
+  const possibleDuplicates = alike
     .filter((other) => other.id !== patient.id && identityKeyOf(other) === identityKeyOf(patient))
     .map(({ id, recordNumber, familyName, givenName }) => ({ id, recordNumber, familyName, givenName }));
   return { ...patient, eyes: item?.eyes ?? [], possibleDuplicates };
