@@ -1,5 +1,6 @@
 /** Acts of the session: sign in, sign out, find out at start; other tabs of the same browser hear of each. */
 import { paths, sessionSchema } from '@/shared/contract';
+import { removeOldDrafts } from '@/shared/client/lib/drafts';
 import { readStored, writeStored } from '@/shared/client/lib/stored';
 import { call, callEmpty } from './client';
 import { queryClient } from './query-client';
@@ -30,6 +31,7 @@ export async function signIn(credentials: { email: string; password: string }): 
   await leaving;
   const session = await call(paths.signIn(), sessionSchema, { method: 'POST', body: credentials });
   writeStored(UNHEARD_KEY, null);
+  removeOldDrafts();
   queryClient.clear();
   sessionStarted(session);
   tell({ kind: 'in', userId: session.user.id });

@@ -42,6 +42,18 @@ export function RadioGroup<T extends string>(props: RadioGroupProps<T>) {
   );
 }
 
+interface KeyPress {
+  key: string;
+  preventDefault: () => void;
+}
+
+/** The press handling of the library hears the space bar on buttons only; here it must not scroll the page either. */
+function isSpace(event: KeyPress): boolean {
+  if (event.key !== ' ') return false;
+  event.preventDefault();
+  return true;
+}
+
 const NEXT_KEYS = ['ArrowRight', 'ArrowDown'];
 const PREVIOUS_KEYS = ['ArrowLeft', 'ArrowUp'];
 
@@ -104,7 +116,9 @@ interface RadioProps {
 function Radio({ option, isChosen, isTabStop, isDisabled, onChoose, onStep, setElement }: RadioProps) {
   const { colors } = useTheme();
   const ring = useFocusRing();
-  const onKeyDown = (event: { key: string; preventDefault: () => void }) => {
+  const onKeyDown = (event: KeyPress) => {
+    if (isDisabled) return;
+    if (isSpace(event)) onChoose();
     const step = NEXT_KEYS.includes(event.key) ? 1 : PREVIOUS_KEYS.includes(event.key) ? -1 : undefined;
     if (step === undefined) return;
     event.preventDefault();
@@ -119,7 +133,7 @@ function Radio({ option, isChosen, isTabStop, isDisabled, onChoose, onStep, setE
       onPress={onChoose}
       onFocus={ring.onFocus}
       onBlur={ring.onBlur}
-      {...({ onKeyDown, tabIndex: isTabStop ? 0 : -1 } as object)}
+      {...({ onKeyDown, tabIndex: isTabStop && !isDisabled ? 0 : -1 } as object)}
       style={[
         {
           minHeight: TOUCH_PX,
@@ -171,13 +185,17 @@ export interface CheckboxProps {
 export function Checkbox({ label, hint, isChecked, onChange, isDisabled = false }: CheckboxProps) {
   const { colors } = useTheme();
   const ring = useFocusRing();
+  const turn = () => onChange(!isChecked);
   return (
     <Pressable
       role="checkbox"
       aria-checked={isChecked}
       aria-label={label}
       disabled={isDisabled}
-      onPress={() => onChange(!isChecked)}
+      onPress={turn}
+      {...({
+        onKeyDown: (event: KeyPress) => (!isDisabled && isSpace(event) ? turn() : undefined),
+      } as object)}
       onFocus={ring.onFocus}
       onBlur={ring.onBlur}
       style={[

@@ -17,3 +17,12 @@ export function writeStored(key: string, value: string | null): void {
     // A full or forbidden storage loses a convenience, never data: nothing to report.
   }
 }
+
+/** Names of everything stored that begins so. */
+export function storedKeys(prefix: string): string[] {
+  try {
+    return Object.keys(globalThis.localStorage ?? {}).filter((key) => key.startsWith(prefix));
+  } catch {
+    return [];
+  }
+}
