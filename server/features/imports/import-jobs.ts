@@ -10,7 +10,7 @@ import { getPractice } from '@/server/features/practice/practice.service';
 import { checkFile, countOutcomes, judgeRows } from './check-file';
 import { toImportRow } from './check-rows';
 import { importDeskOf } from './import-desk';
-import { changeImport, findImportBytes, listIdsWithStatus } from './import.repository';
+import { addImport, changeImport, findImportBytes, listIdsWithStatus } from './import.repository';
 import { readRows, type ReadRows } from './read-rows';
 import { storeRows } from './store-rows';
 
@@ -72,6 +72,25 @@ export async function recoverImports(deps: Deps): Promise<void> {
     return listIdsWithStatus('checking', act.transaction);
   });
   for (const id of unchecked) deps.background.run('import.check', () => runCheck(deps, id));
+}
+
+/**
+ * A file received, checked and stored within one act: for filling a new database, where nobody waits for a
+ * dry run. Throws when the file as a whole cannot be read.
+ */
+export async function storeFileAtOnce(
+  deps: Deps,
+  act: Act,
+  { name, bytes, sha256 }: { name: string; bytes: Buffer; sha256: string },
+): Promise<void> {
+  const read = await readRows(bytes, today(deps), () => undefined);
+  if ('problems' in read) throw new Error(`${name} cannot be read: ${read.problems[0]?.message ?? ''}`);
+  const importId = act.newId();
+  const uploaded = { uploadedBy: act.actor.id, uploadedAt: act.at, sameFileAs: null };
+  await addImport({ id: importId, fileName: name, bytes, sha256, ...uploaded }, act.transaction);
+  const storing = { status: 'storing', readAs: read.readAs, storedBy: act.actor.id } as const;
+  await changeImport(importId, { from: 'checking', ...storing }, act.transaction);
+  await storeRead(deps, act, { importId, read, isDemo: true });
 }
 
 interface StoreRequest {

@@ -4,12 +4,14 @@ import {
   IMPORT_MAX_BYTES,
   importRowPageSchema,
   importSchema,
+  localDateOf,
   pageOf,
   pageQuerySchema,
   paths,
   ROW_OUTCOMES,
 } from '@/shared/contract';
 import type { Deps } from '@/server/deps';
+import { demoBiometryCsv } from '@/server/db/seeds/demo-biometry';
 import { getPractice } from '@/server/features/practice/practice.service';
 import { ProblemError } from '@/server/http/problem';
 import { created, file, json } from '@/server/http/reply';
@@ -24,16 +26,16 @@ import {
   sha256Of,
   uploadFile,
 } from './import.service';
-import { demoCsv, templateCsv } from './sample-files';
+import { templateCsv } from './sample-files';
 
 const CSV = 'text/csv; charset=utf-8';
 const byId = z.object({ id: idSchema });
 
 export function importRoutes(deps: Deps): Route[] {
-  return [...sampleRoutes(), ...readingRoutes(deps), ...changingRoutes(deps)];
+  return [...sampleRoutes(deps), ...readingRoutes(deps), ...changingRoutes(deps)];
 }
 
-function sampleRoutes(): Route[] {
+function sampleRoutes(deps: Deps): Route[] {
   return [
     defineRoute({
       method: 'get',
@@ -51,8 +53,8 @@ function sampleRoutes(): Route[] {
       summary: 'Biometry of invented people; only in the demonstration',
       reply: CSV,
       handle: async () => {
-        const bytes = (await getPractice()).isDemo ? demoCsv() : undefined;
-        if (!bytes) throw new ProblemError('not-found');
+        if (!(await getPractice()).isDemo) throw new ProblemError('not-found');
+        const bytes = demoBiometryCsv(localDateOf(deps.clock.now()));
         return file({ bytes, contentType: CSV, fileName: 'landfall-demo-biometry.csv' });
       },
     }),

@@ -20,7 +20,7 @@ import {
   type StoredImport,
 } from './import.repository';
 
-export { recoverImports } from './import-jobs';
+export { recoverImports, storeFileAtOnce } from './import-jobs';
 
 const FILE_NAME_MAX_LENGTH = 200;
 
