@@ -61,6 +61,12 @@ export type { AxialLengthMethod, DefaultSpreadOptions } from './spread/default-s
 export type { Spread, SpreadInput, SpreadMark, SpreadPart } from './spread/spread';
 export { normalCdf } from './spread/normal';
 
+export { methodMarkMeanings } from './method-facts';
+export type { MethodFacts, MethodMark } from './method-facts';
+export { solverFacts } from './solvers/facts';
+export { statisticsFacts } from './statistics/facts';
+export { personalisationFacts } from './personalisation/facts';
+
 export { DivergedError } from './solvers/diverged-error';
 export { findRoot } from './solvers/root';
 export { randomFromSeed } from './solvers/random';

@@ -6,10 +6,12 @@ import type { BenchRow } from './bench-row';
 import { benchFirstLoad } from './first-load.bench';
 import { benchFormulas } from './formulas.bench';
 import { benchImport } from './import.bench';
+import { benchPersonalisation } from './personalisation.bench';
 import { benchPlan } from './plan.bench';
 
 const BENCHES: Record<string, () => BenchRow[] | Promise<BenchRow[]>> = {
   formulas: benchFormulas,
+  personalisation: benchPersonalisation,
   plan: benchPlan,
   import: benchImport,
   'first-load': benchFirstLoad,
