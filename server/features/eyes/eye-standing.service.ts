@@ -1,9 +1,9 @@
 /** Where eyes stand on their way, with the flags that hold them up. For one eye or for a page of patients. */
 import { EYE_STAGE_WORDS, type Eye, type EyeStage, type Flag, type Measurement } from '@/shared/contract';
 
+import { checkMeasurements } from '@/shared/clinical/measurement-checks';
 import type { Transaction } from '@/server/db/write-queue';
 import { listMeasurements, ofRecord } from '@/server/features/measurements/measurement.service';
-import { raisedFlags } from '@/server/features/eyes/raised-flags';
 import { findPlanStates, type PlanState } from './plan-state.repository';
 import { listSettlements, type Settlement } from './settlement.repository';
 
@@ -37,7 +37,7 @@ export async function findStandings(
     const fellow = eyes.find(({ patientId, side }) => patientId === eye.patientId && side !== eye.side);
     const measurement = ofRecord(measurements.get(eye.id));
     const fellowMeasurement = ofRecord(fellow && measurements.get(fellow.id));
-    const raised = measurement ? raisedFlags({ measurement, fellowMeasurement, eye, today }) : [];
+    const raised = measurement ? checkMeasurements({ measurement, fellowMeasurement, eye, today }) : [];
     const settled = settlements.filter(({ eyeId }) => eyeId === eye.id);
     const flags = raised.map((flag) => ({ ...flag, settlement: settlementOf(flag, measurement, settled) }));
     const stage = stageOf({ measurement, flags, plan: plans.get(eye.id) });

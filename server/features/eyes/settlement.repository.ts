@@ -1,5 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { AccountModel } from '@/server/db/models/account';
+import { EyeModel } from '@/server/db/models/eye';
 import { FlagSettlementModel } from '@/server/db/models/flag-settlement';
 
 /** A flag settled by a named person with a reason. */
@@ -27,7 +28,7 @@ export async function addSettlement(settlement: NewSettlement, transaction: Tran
   await FlagSettlementModel.create(settlement, { transaction });
 }
 
-/** Newest first. */
+/** Those that still count, newest first: a change of the eye's history voids what was settled before it. */
 export async function listSettlements(
   eyeIds: readonly string[],
   transaction?: Transaction,
@@ -37,13 +38,20 @@ export async function listSettlements(
     order: [['settledAt', 'DESC']],
     transaction,
   });
+  const eyes = await EyeModel.findAll({
+    attributes: ['id', 'updatedAt'],
+    where: { id: [...eyeIds] },
+    transaction,
+  });
+  const changedAt = new Map(eyes.map(({ id, updatedAt }) => [id, updatedAt]));
   const people = await AccountModel.findAll({
     attributes: ['id', 'displayName'],
     where: { id: [...new Set(rows.map(({ settledBy }) => settledBy))] },
     transaction,
   });
   const names = new Map(people.map(({ id, displayName }) => [id, displayName]));
-  return rows.map(({ eyeId, measurementId, ruleId, settledBy, settledAt, reason }) => ({
+  const standing = rows.filter(({ eyeId, settledAt }) => settledAt >= (changedAt.get(eyeId) ?? ''));
+  return standing.map(({ eyeId, measurementId, ruleId, settledBy, settledAt, reason }) => ({
     eyeId,
     measurementId,
     ruleId,

@@ -250,9 +250,11 @@ describe('stops', () => {
     }
 
     expect(await desk()).toMatchObject({ stage: 'plan', waitsFor: 'Waits for a plan' });
-    expect(await audits('flag.settle')).toMatchObject([
-      { actorId: surgeon.id, patientId: patient.id, detail: { side: 'right', reason: 'asked by telephone' } },
-    ]);
+    expect((await audits('flag.settle'))[0]).toMatchObject({
+      actorId: surgeon.id,
+      patientId: patient.id,
+      detail: { side: 'right', severity: 'stop', measurementId, reason: 'asked by telephone' },
+    });
   });
 
   it('go away when what is missing is answered', async () => {
@@ -273,6 +275,31 @@ describe('stops', () => {
     await enter({ axialLengthMm: '23.6', measuredAt: '2026-02-25' });
 
     expect((await desk()).stage).toBe('check');
+  });
+
+  it('are not settled any more when the history is changed after', async () => {
+    const { id: measurementId } = await enter();
+    await technician.put(
+      paths.eyeHistory(patient.id, 'right'),
+      { ...PLAIN_HISTORY, cornealSurgery: 'unknown' },
+      0,
+    );
+    const [stop] = openStops((await desk()).flags);
+    expect(stop?.message).toBe('It is not known whether this cornea had surgery');
+    await surgeon.post(path(), { ruleId: stop?.ruleId, measurementId, reason: 'topography is regular' });
+    expect((await desk()).stage).toBe('plan');
+
+    test.clock.advance(1000);
+    await technician.put(
+      paths.eyeHistory(patient.id, 'right'),
+      { ...PLAIN_HISTORY, cornealSurgery: null },
+      1,
+    );
+
+    expect((await desk()).stage).toBe('check');
+    expect(openStops((await desk()).flags).map(({ message }) => message)).toEqual([
+      'Nobody has answered whether this cornea had surgery',
+    ]);
   });
 
   it('are settled once, while they stand, for the measurement of record', async () => {
