@@ -26,7 +26,7 @@ async function refreshOnce(): Promise<boolean> {
   const response = await attempt(paths.refresh(), { method: 'POST' });
   if (response.ok) return taken(sessionSchema.parse(await response.json()), before);
   if (response.status !== 401) throw await problemOf(response);
-  if (isStill(before)) sessionEnded(before.status === 'in');
+  if (isStill(before)) sessionEnded(before.status === 'in' ? 'idle' : 'absent');
   return getSession().status === 'in';
 }
 
@@ -34,7 +34,7 @@ async function refreshOnce(): Promise<boolean> {
 function taken(session: Session, before: SessionState): boolean {
   if (!isStill(before)) return getSession().status === 'in';
   if (before.status === 'in' && before.user.id !== session.user.id) {
-    sessionEnded();
+    sessionEnded('left');
     return false;
   }
   sessionStarted(session);

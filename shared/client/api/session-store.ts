@@ -5,9 +5,12 @@
 import { useSyncExternalStore } from 'react';
 import type { Session, SessionUser } from '@/shared/contract';
 
+/** `absent`: there was none, or it is no longer valid; `idle`: too long without an act; `left`: signed out on purpose. */
+export type WhyOut = 'absent' | 'idle' | 'left';
+
 export type SessionState =
   | { status: 'unknown' }
-  | { status: 'out'; wasIdle: boolean }
+  | { status: 'out'; why: WhyOut }
   | { status: 'in'; user: SessionUser; accessToken: string; endsAtMs: number };
 
 let state: SessionState = { status: 'unknown' };
@@ -29,9 +32,9 @@ export function sessionStarted(session: Session): void {
   });
 }
 
-export function sessionEnded(wasIdle = false): void {
+export function sessionEnded(why: WhyOut = 'absent'): void {
   // Several tabs and calls may learn of the same end; the first one knew why.
-  if (state.status !== 'out') set({ status: 'out', wasIdle });
+  if (state.status !== 'out') set({ status: 'out', why });
 }
 
 export function onSessionChange(listener: () => void): () => void {

@@ -6,6 +6,7 @@ import { call, callEmpty } from './client';
 import { queryClient } from './query-client';
 import { refreshSession } from './refresh';
 import { getSession, onSessionChange, sessionEnded, sessionStarted } from './session-store';
+import type { WhyOut } from './session-store';
 
 /** Minutes without any act after which the session ends; the server holds the same limit. */
 export const IDLE_MINUTES = 15;
@@ -13,7 +14,7 @@ const CHANNEL = 'landfall.session';
 /** Set while the server has not heard of a sign-out: its cookie would still open the door. */
 const UNHEARD_KEY = 'landfall.sign-out-unheard';
 
-type TabMessage = { kind: 'in'; userId: string } | { kind: 'out'; wasIdle: boolean };
+type TabMessage = { kind: 'in'; userId: string } | { kind: 'out'; why: WhyOut };
 
 const channel = typeof BroadcastChannel === 'undefined' ? undefined : new BroadcastChannel(CHANNEL);
 channel?.addEventListener('message', ({ data }: MessageEvent<TabMessage>) => heard(data));
@@ -38,10 +39,10 @@ export async function signIn(credentials: { email: string; password: string }): 
 }
 
 /** Ends the session here and in other tabs at once, and on the server as soon as it hears of it. */
-export function signOut(wasIdle = false): Promise<void> {
+export function signOut(why: 'left' | 'idle' = 'left'): Promise<void> {
   writeStored(UNHEARD_KEY, '1');
-  sessionEnded(wasIdle);
-  tell({ kind: 'out', wasIdle });
+  sessionEnded(why);
+  tell({ kind: 'out', why });
   leaving = endOnServer().catch(() => undefined);
   return leaving;
 }
@@ -65,6 +66,6 @@ export async function resumeSession(): Promise<void> {
 /** The cookie is shared: when somebody else signs in elsewhere, this tab must not go on under the old name. */
 function heard(message: TabMessage): void {
   const session = getSession();
-  if (message.kind === 'out') sessionEnded(message.wasIdle);
-  else if (session.status === 'in' && session.user.id !== message.userId) sessionEnded();
+  if (message.kind === 'out') sessionEnded(message.why);
+  else if (session.status === 'in' && session.user.id !== message.userId) sessionEnded('left');
 }

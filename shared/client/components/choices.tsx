@@ -151,7 +151,7 @@ function Radio({ option, isChosen, isTabStop, isDisabled, onChoose, onStep, setE
         ring.style,
       ]}
     >
-      <Svg width={16} height={16} aria-hidden>
+      <Svg width={16} height={16} style={{ flexShrink: 0 }} aria-hidden>
         <Circle
           cx={8}
           cy={8}
@@ -210,7 +210,7 @@ export function Checkbox({ label, hint, isChecked, onChange, isDisabled = false 
         ring.style,
       ]}
     >
-      <Svg width={20} height={20} aria-hidden>
+      <Svg width={20} height={20} style={{ flexShrink: 0 }} aria-hidden>
         <Rect
           x={1}
           y={1}

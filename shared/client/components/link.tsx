@@ -8,8 +8,8 @@ import { useFocusRing } from './focus-ring';
 export interface LinkProps {
   href: Href;
   label: string;
-  /** `text` inside running words, `button` as an action, `primary` as the main action. */
-  kind?: 'text' | 'button' | 'primary';
+  /** `text` inside running words, `row` as the name of a row, `button` as an action, `primary` as the main one. */
+  kind?: 'text' | 'row' | 'button' | 'primary';
   accessibleLabel?: string;
   isCurrent?: boolean;
 }
@@ -17,7 +17,7 @@ export interface LinkProps {
 export function Link({ href, label, kind = 'text', accessibleLabel, isCurrent }: LinkProps) {
   const { colors } = useTheme();
   const ring = useFocusRing();
-  const isButton = kind !== 'text';
+  const isButton = kind === 'button' || kind === 'primary';
   return (
     <RouterLink
       href={href}
@@ -41,6 +41,8 @@ export function Link({ href, label, kind = 'text', accessibleLabel, isCurrent }:
           backgroundColor: kind === 'primary' ? colors.sea : colors.surface,
           textAlign: 'center',
         },
+        // Reaches into the row's own padding: big enough for a finger, no taller to the eye.
+        kind === 'row' && { paddingVertical: SPACE.m, marginVertical: -SPACE.m },
         ring.style,
       ]}
     >

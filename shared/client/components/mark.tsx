@@ -23,7 +23,7 @@ export function Mark({ tone, label }: { tone: MarkTone; label?: string }) {
 
 function MarkShape({ tone, colour }: { tone: MarkTone; colour: string }) {
   return (
-    <Svg width={14} height={14} viewBox="0 0 14 14" aria-hidden>
+    <Svg width={14} height={14} viewBox="0 0 14 14" style={{ flexShrink: 0 }} aria-hidden>
       {tone === 'stop' ? <Rect x={1} y={1} width={12} height={12} fill={colour} /> : null}
       {tone === 'weigh' ? <Path d="M7 0.5 L13.5 13 L0.5 13 Z" fill={colour} /> : null}
       {tone === 'note' ? <Circle cx={7} cy={7} r={5.5} fill="none" stroke={colour} strokeWidth={2} /> : null}

@@ -82,7 +82,7 @@ function Table<T>({ label, columns, items, keyOf, linkOf }: DataTableProps<T>) {
               }}
             >
               {position === 0 && linkOf ? (
-                <Link {...linkOf(item)} />
+                <Link {...linkOf(item)} kind="row" />
               ) : (
                 cell(column.render(item), column.isNumber)
               )}
@@ -121,7 +121,11 @@ function Cards<T>({ label, columns, items, keyOf, linkOf }: DataTableProps<T>) {
           {columns.map((column, position) =>
             position === 0 ? (
               <View key={column.key}>
-                {linkOf ? <Link {...linkOf(item)} /> : cell(column.render(item), column.isNumber, true)}
+                {linkOf ? (
+                  <Link {...linkOf(item)} kind="row" />
+                ) : (
+                  cell(column.render(item), column.isNumber, true)
+                )}
               </View>
             ) : (
               <View

@@ -116,7 +116,7 @@ describe('an expired token', () => {
 
     await expect(api.call('/api/thing', thing)).rejects.toMatchObject({ code: 'unauthenticated' });
 
-    expect(api.getSession()).toEqual({ status: 'out', wasIdle: true });
+    expect(api.getSession()).toEqual({ status: 'out', why: 'idle' });
   });
 
   it.each([429, 503])('signs nobody out when the server answers %p', async (status) => {

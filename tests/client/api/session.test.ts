@@ -98,7 +98,7 @@ describe('signing out', () => {
 
     expect(api.getSession().status).toBe('out');
     expect(api.queryClient.getQueryData(['patients'])).toBeUndefined();
-    expect(FakeChannel.posted.at(-1)).toEqual({ kind: 'out', wasIdle: false });
+    expect(FakeChannel.posted.at(-1)).toEqual({ kind: 'out', why: 'left' });
     await heard;
     expect(server.count(SIGN_OUT)).toBe(1);
   });
@@ -145,7 +145,7 @@ describe('the start', () => {
 
     await api.resumeSession();
 
-    expect(api.getSession()).toEqual({ status: 'out', wasIdle: false });
+    expect(api.getSession()).toEqual({ status: 'out', why: 'absent' });
   });
 
   it('stays open when the server does not answer', async () => {
@@ -161,9 +161,9 @@ describe('another tab', () => {
   it('that signs out takes this one with it, and says why', async () => {
     await api.signIn(CREDENTIALS);
 
-    FakeChannel.hear({ kind: 'out', wasIdle: true });
+    FakeChannel.hear({ kind: 'out', why: 'idle' });
 
-    expect(api.getSession()).toEqual({ status: 'out', wasIdle: true });
+    expect(api.getSession()).toEqual({ status: 'out', why: 'idle' });
   });
 
   it('where another person signs in ends the session of this one', async () => {

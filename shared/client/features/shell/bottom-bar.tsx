@@ -25,7 +25,8 @@ const MORE_ICON = 'M5 12 h0.01 M12 12 h0.01 M19 12 h0.01';
 export function BottomBar({ user, places }: { user: SessionUser; places: Place[] }) {
   const { colors } = useTheme();
   const path = usePathname();
-  const [isOpen, setIsOpen] = useState(false);
+  // Open at one address: going anywhere, by a link or by Back, closes it.
+  const [openAt, setOpenAt] = useState<string>();
   const shown = places.slice(0, BAR_PLACES_MAX - 1);
   const rest = [...places.slice(BAR_PLACES_MAX - 1), ABOUT];
   const link = (place: Place, shape: 'bar' | 'rail') => (
@@ -53,20 +54,18 @@ export function BottomBar({ user, places }: { user: SessionUser; places: Place[]
       <BarButton
         label="More"
         icon={(colour) => <PlaceIcon path={MORE_ICON} colour={colour} />}
-        onPress={() => setIsOpen(true)}
+        onPress={() => setOpenAt(path)}
       />
       <Dialog
         title="More"
-        isOpen={isOpen}
-        onClose={() => setIsOpen(false)}
+        isOpen={openAt === path}
+        onClose={() => setOpenAt(undefined)}
         cancelLabel="Close"
         actions={<Button label="Sign out" onPress={() => void signOut()} />}
       >
         <Text variant="strong">{user.displayName}</Text>
         <Text color="ink2">{user.roles.map((role) => ROLE_NAMES[role]).join(', ')}</Text>
-        <View {...({ onClick: () => setIsOpen(false) } as object)}>
-          {rest.map((place) => link(place, 'rail'))}
-        </View>
+        <View>{rest.map((place) => link(place, 'rail'))}</View>
       </Dialog>
     </View>
   );

@@ -20,7 +20,7 @@ export function IdleGuard() {
     const renew = createRenewal();
     const look = () => {
       const state = clock.state();
-      if (state === 'over') void signOut(true);
+      if (state === 'over') void signOut('idle');
       setIsWarning(state === 'warning');
       return state;
     };

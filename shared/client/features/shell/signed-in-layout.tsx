@@ -9,6 +9,7 @@ import { asProblem } from '@/shared/client/api/problem';
 import type { ApiProblem } from '@/shared/client/api/problem';
 import { resumeSession } from '@/shared/client/api/session';
 import { useSession } from '@/shared/client/api/session-store';
+import type { WhyOut } from '@/shared/client/api/session-store';
 import { ErrorPanel, Loading } from '@/shared/client/components/states';
 import { currentPath } from '@/shared/client/lib/next-path';
 import { useTheme } from '@/shared/client/theme/theme-context';
@@ -20,14 +21,7 @@ export function SignedInLayout() {
   const { colors } = useTheme();
   if (session.status === 'unknown') return <Resuming />;
   if (session.status === 'out') {
-    return (
-      <Redirect
-        href={{
-          pathname: '/sign-in',
-          params: { next: currentPath(), ...(session.wasIdle ? { idle: '1' } : {}) },
-        }}
-      />
-    );
+    return <Redirect href={{ pathname: '/sign-in', params: waysBack(session.why) }} />;
   }
   return (
     <Shell user={session.user}>
@@ -41,6 +35,12 @@ export function SignedInLayout() {
       />
     </Shell>
   );
+}
+
+/** Who left on purpose leaves no address behind: the next person at this computer begins at their own start. */
+function waysBack(why: WhyOut): Record<string, string> {
+  if (why === 'left') return {};
+  return { next: currentPath(), ...(why === 'idle' ? { idle: '1' } : {}) };
 }
 
 function Resuming() {
