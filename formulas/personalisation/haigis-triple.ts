@@ -10,7 +10,7 @@
  *   position on depth and length) [M]; a0 zeroed afterwards, as fitting scatter alone leaves an offset: Langenbucher et
  *   al., PLOS ONE 2022 e0267352 [V abstract].
  * Erratum / variant: each eye weighs by the square of what a millimetre does to its refraction [D]: 1.36 D with a lens
- *   of 21 D, 0.16 D with one of 3 D, whose place is therefore known seventy times less well. The interval of a0 takes a1
+ *   of 21 D, 0.16 D with one of 3 D, whose place is therefore known eight times less well. The interval of a0 takes a1
  *   and a2 as given.
  */
 import { DegenerateDataError, TooFewValuesError } from '../statistics/errors';
