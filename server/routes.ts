@@ -10,6 +10,7 @@ import { lensRoutes } from '@/server/features/lenses/lens.routes';
 import { measurementRoutes } from '@/server/features/measurements/measurement.routes';
 import { outboxRoutes } from '@/server/features/outbox/outbox.routes';
 import { patientRoutes } from '@/server/features/patients/patient.routes';
+import { planRoutes } from '@/server/features/plans/plan.routes';
 import { practiceRoutes } from '@/server/features/practice/practice.routes';
 import type { Route } from '@/server/http/route';
 
@@ -24,6 +25,7 @@ export function allRoutes(deps: Deps): Route[] {
     ...measurementRoutes(),
     ...importRoutes(deps),
     ...lensRoutes(),
+    ...planRoutes(deps),
     ...outboxRoutes(),
     ...auditRoutes(),
   ];

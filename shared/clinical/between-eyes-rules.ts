@@ -90,27 +90,37 @@ function isCopy({ values, fellow }: CheckFacts): boolean {
 }
 
 /** Thick, and besides shallow or much thicker than its fellow; names what would decide it and is missing. */
-function swollenLens({ values, fellow, chamberDepthMm }: CheckFacts): ReturnType<CheckRule['judge']> {
-  const { lensThicknessMm } = values;
-  if (lensThicknessMm === null || lensThicknessMm <= LIMITS.lensThicknessMm.note) return null;
-  const overFellowMm = fellow?.lensThicknessMm == null ? null : lensThicknessMm - fellow.lensThicknessMm;
-  const isShallow = chamberDepthMm !== null && chamberDepthMm < LIMITS.shallowChamberMm;
-  const isThicker = overFellowMm !== null && overFellowMm > LIMITS.lensThicknessOverFellowMm;
-  if (!isShallow && !isThicker) return null;
-  const signs = [
-    `lens ${lensThicknessMm.toFixed(2)} mm`,
-    ...(isShallow ? [`chamber ${chamberDepthMm.toFixed(2)} mm`] : []),
-    ...(isThicker ? [`${overFellowMm.toFixed(2)} mm thicker than the fellow lens`] : []),
-  ];
-  const missing = [
-    ...(chamberDepthMm === null ? ['chamber depth'] : []),
-    ...(overFellowMm === null ? ['thickness of the fellow lens'] : []),
-    'white reflex at the slit lamp',
-  ];
+function swollenLens(facts: CheckFacts): ReturnType<CheckRule['judge']> {
+  const thicknessMm = facts.values.lensThicknessMm;
+  if (thicknessMm === null || thicknessMm <= LIMITS.lensThicknessMm.note) return null;
+  const signs = [...shallowSign(facts), ...thickerSign(facts, thicknessMm)];
+  if (signs.length === 0) return null;
+  const seen = [`lens ${thicknessMm.toFixed(2)} mm`, ...signs].join(', ');
   return {
     severity: 'weigh',
-    message: `Pattern of a swollen lens: ${signs.join(', ')}. Still to look at: ${missing.join(', ')}`,
+    message: `Pattern of a swollen lens: ${seen}. Still to look at: ${missingSigns(facts).join(', ')}`,
     advice:
       'The capsule opening may run out and the lens position is less certain: plan backup lenses, promise nothing that needs a whole capsule.',
   };
+}
+
+function shallowSign({ chamberDepthMm }: CheckFacts): string[] {
+  const isShallow = chamberDepthMm !== null && chamberDepthMm < LIMITS.shallowChamberMm;
+  return isShallow ? [`chamber ${chamberDepthMm.toFixed(2)} mm`] : [];
+}
+
+function thickerSign({ fellow }: CheckFacts, thicknessMm: number): string[] {
+  if (fellow?.lensThicknessMm == null) return [];
+  const overFellowMm = thicknessMm - fellow.lensThicknessMm;
+  return overFellowMm > LIMITS.lensThicknessOverFellowMm
+    ? [`${overFellowMm.toFixed(2)} mm thicker than the fellow lens`]
+    : [];
+}
+
+function missingSigns({ chamberDepthMm, fellow }: CheckFacts): string[] {
+  return [
+    ...(chamberDepthMm === null ? ['chamber depth'] : []),
+    ...(fellow?.lensThicknessMm == null ? ['thickness of the fellow lens'] : []),
+    'white reflex at the slit lamp',
+  ];
 }

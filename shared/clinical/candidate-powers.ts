@@ -22,14 +22,23 @@ export interface PowerWindow {
   beyond: 'above' | 'below' | null;
 }
 
+export interface PowerQuestion {
+  exactPowerD: number;
+  ranges: readonly PowerRange[];
+  /** A power chosen already: shown even where it is far from the exact one. */
+  chosenPowerD: number | null;
+}
+
 /** The powers round the exact one, from higher to lower; at an end of the range, the ones nearest to it. */
-export function powersAround(exactPowerD: number, ranges: readonly PowerRange[]): PowerWindow {
+export function powersAround({ exactPowerD, ranges, chosenPowerD }: PowerQuestion): PowerWindow {
   const powers = availablePowers(ranges);
   const lowest = powers[0] ?? exactPowerD;
   const highest = powers.at(-1) ?? exactPowerD;
   const firstAbove = powers.findIndex((powerD) => powerD >= exactPowerD);
   const centre = firstAbove < 0 ? powers.length : firstAbove;
-  const shown = powers.slice(Math.max(centre - ROWS_EACH_SIDE, 0), centre + ROWS_EACH_SIDE);
+  const first = Math.max(centre - ROWS_EACH_SIDE, 0);
+  const last = centre + ROWS_EACH_SIDE;
+  const shown = powers.filter((powerD, index) => (index >= first && index < last) || powerD === chosenPowerD);
   const beyond = exactPowerD > highest ? 'above' : exactPowerD < lowest ? 'below' : null;
   return { powersD: shown.reverse(), beyond };
 }

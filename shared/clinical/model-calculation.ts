@@ -25,6 +25,8 @@ export interface ModelQuestion {
   input: PlanInput;
   /** Formulas in the order in which they would lead. */
   leading: readonly FormulaId[];
+  /** The power chosen for this model, if any. */
+  chosenPowerD: number | null;
 }
 
 type Prepared = ReturnType<typeof prepareFormula>;
@@ -51,7 +53,11 @@ export function calculateModel(question: ModelQuestion): ModelCalculation {
     })),
   };
   if (!leader) return { ...base, leadingFormula: null, candidates: [], spreadParts: [], notices: [] };
-  const { powersD, beyond } = powersAround(leader.exactPowerD, lens.powerRanges);
+  const { powersD, beyond } = powersAround({
+    exactPowerD: leader.exactPowerD,
+    ranges: lens.powerRanges,
+    chosenPowerD: question.chosenPowerD,
+  });
   const landings = prepareLanding({
     formula: leader.formula,
     eye: toGeometry(question.used),

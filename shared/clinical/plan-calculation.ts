@@ -3,7 +3,7 @@
  * the refraction lands. Pure: the same inputs give the same result on the server, in the client and years later.
  */
 import { FORMULA_VERSION } from '@/formulas';
-import type { Eye, Flag, Lens, Measurement, PlanCalculation, PlanInput } from '@/shared/contract';
+import type { Eye, Flag, Lens, Measurement, PlanCalculation, PlanChoice, PlanInput } from '@/shared/contract';
 import { usedEye } from './effective-eye';
 import { suggestFormulas } from './formula-suggestion';
 import { calculateModel } from './model-calculation';
@@ -15,9 +15,17 @@ export interface PlanQuestion {
   lenses: readonly Lens[];
   input: PlanInput;
   flags: readonly Flag[];
+  choice: PlanChoice | null;
 }
 
-export function calculatePlan({ eye, measurement, lenses, input, flags }: PlanQuestion): PlanCalculation {
+export function calculatePlan({
+  eye,
+  measurement,
+  lenses,
+  input,
+  flags,
+  choice,
+}: PlanQuestion): PlanCalculation {
   const used = usedEye(measurement.values);
   const suggestion = suggestFormulas(used.axialLengthMm);
   const leading = input.leadingFormula ? [input.leadingFormula] : suggestion.formulas;
@@ -28,7 +36,15 @@ export function calculatePlan({ eye, measurement, lenses, input, flags }: PlanQu
     toleranceD: input.toleranceD,
     suggestion,
     models: lenses.map((lens) =>
-      calculateModel({ lens, used, values: measurement.values, history: eye.history, input, leading }),
+      calculateModel({
+        lens,
+        used,
+        values: measurement.values,
+        history: eye.history,
+        input,
+        leading,
+        chosenPowerD: choice?.lensId === lens.id ? choice.powerD : null,
+      }),
     ),
     flags: [...flags],
   };

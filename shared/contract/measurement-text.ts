@@ -126,9 +126,10 @@ function valuesOf(
 }
 
 const measurementTextInput = z.object(
-  Object.fromEntries(
-    MEASUREMENT_TEXT_FIELDS.map((field) => [field, z.string().optional()]),
-  ) as Record<MeasurementTextField, z.ZodOptional<z.ZodString>>,
+  Object.fromEntries(MEASUREMENT_TEXT_FIELDS.map((field) => [field, z.string().optional()])) as Record<
+    MeasurementTextField,
+    z.ZodOptional<z.ZodString>
+  >,
 );
 
 const entryOf = <T extends z.ZodType>(text: T) =>

@@ -9,7 +9,9 @@ import {
   idSchema,
   isoDateSchema,
   isoInstantSchema,
+  lineOf,
   pageOf,
+  pageQuerySchema,
   sideSchema,
   textOf,
   versionSchema,
@@ -197,11 +199,24 @@ export const planDeskSchema = z.object({
 export type PlanDesk = z.infer<typeof planDeskSchema>;
 
 export const signPlanSchema = z.object({
+  /** The version that was on the screen: nobody signs what somebody else changed meanwhile. */
+  version: versionSchema,
   password: z.string().min(1, 'Type your password').max(200),
   /** The second, deliberate act: the side in words, typed or chosen anew. */
   confirmedSide: sideSchema,
   /** Rule ids of the weigh flags that the surgeon has read. */
   acknowledgedRuleIds: z.array(z.string().max(60)).max(60),
+});
+
+export type SignPlan = z.infer<typeof signPlanSchema>;
+
+/** What a new draft may be given; the rest starts from the practice's usual values. */
+export const newPlanSchema = planInputSchema.partial();
+export type NewPlan = z.infer<typeof newPlanSchema>;
+
+export const planListQuerySchema = pageQuerySchema.extend({
+  status: z.enum(PLAN_STATUSES).optional(),
+  search: lineOf(100).optional(),
 });
 
 /** A line of the list of signed plans, with the choice in plain words. */

@@ -12,6 +12,7 @@ import type { Act } from '@/server/act';
 import { recordAudit } from '@/server/audit/writer';
 import { enterMeasurement, ofRecord, readEntry } from '@/server/features/measurements/measurement.service';
 import { getPatient } from '@/server/features/patients/patient-record.service';
+import { listOfEye } from '@/server/features/plans/plan-list.service';
 import { ProblemError, takenField } from '@/server/http/problem';
 import { getEyes } from './eye-record.service';
 import { findStandings, type EyeStanding } from './eye-standing.service';
@@ -41,7 +42,7 @@ export async function viewEyeDesk(act: Act, { patientId, side }: EyeAddress): Pr
     measurements,
     fellowMeasurement: ofRecord(fellow.measurements),
     flags,
-    plans: [],
+    plans: await listOfEye(act, eye.id),
     stage,
     waitsFor,
   };

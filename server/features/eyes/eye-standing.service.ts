@@ -4,6 +4,10 @@ import { EYE_STAGE_WORDS, type Eye, type EyeStage, type Flag, type Measurement }
 import { checkMeasurements } from '@/shared/clinical/measurement-checks';
 import type { Transaction } from '@/server/db/write-queue';
 import { listMeasurements, ofRecord } from '@/server/features/measurements/measurement.service';
+import { listLenses } from '@/server/features/lenses/lens.service';
+import { listPatientsById } from '@/server/features/patients/patient-record.service';
+import { outOfDateReasons, type PresentFacts } from '@/server/features/plans/out-of-date';
+import { readFrozen } from '@/server/features/plans/signed-snapshot';
 import { findPlanStates, type PlanState } from './plan-state.repository';
 import { listSettlements, type Settlement } from './settlement.repository';
 
@@ -28,10 +32,12 @@ export async function findStandings(
   transaction?: Transaction,
 ): Promise<EyeStanding[]> {
   const ids = eyes.map(({ id }) => id);
-  const [measurements, settlements, plans] = await Promise.all([
+  const [measurements, settlements, plans, lenses, patients] = await Promise.all([
     listMeasurements(eyes, transaction),
     listSettlements(ids, transaction),
     findPlanStates(ids, transaction),
+    listLenses(transaction),
+    listPatientsById([...new Set(eyes.map(({ patientId }) => patientId))], transaction),
   ]);
   return eyes.map((eye) => {
     const fellow = eyes.find(({ patientId, side }) => patientId === eye.patientId && side !== eye.side);
@@ -40,7 +46,9 @@ export async function findStandings(
     const raised = measurement ? checkMeasurements({ measurement, fellowMeasurement, eye, today }) : [];
     const settled = settlements.filter(({ eyeId }) => eyeId === eye.id);
     const flags = raised.map((flag) => ({ ...flag, settlement: settlementOf(flag, measurement, settled) }));
-    const stage = stageOf({ measurement, flags, plan: plans.get(eye.id) });
+    const patient = patients.find(({ id }) => id === eye.patientId);
+    const present = patient && { patient, eye, measurements: measurements.get(eye.id) ?? [], lenses };
+    const stage = stageOf({ measurement, flags, plan: plans.get(eye.id), present });
     return {
       eye,
       measurements: measurements.get(eye.id) ?? [],
@@ -69,11 +77,12 @@ interface StageFacts {
   measurement: Measurement | null;
   flags: readonly Flag[];
   plan: PlanState | undefined;
+  present: PresentFacts | undefined;
 }
 
-function stageOf({ measurement, flags, plan }: StageFacts): EyeStage {
-  if (plan?.signedMeasurementId) {
-    return plan.signedMeasurementId === measurement?.id ? 'signed' : 'out-of-date';
+function stageOf({ measurement, flags, plan, present }: StageFacts): EyeStage {
+  if (plan?.signed && present) {
+    return outOfDateReasons(readFrozen(plan.signed), present).length === 0 ? 'signed' : 'out-of-date';
   }
   if (!measurement) return 'measure';
   if (flags.some(isOpenStop)) return 'check';

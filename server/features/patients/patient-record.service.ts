@@ -8,12 +8,13 @@ import { ProblemError } from '@/server/http/problem';
 import {
   addPatients,
   findPatient,
+  listPatientsAfter,
   listPatientsByBirthDate,
   listPatientsById,
   listPatientsByRecordNumber,
   type NewPatient,
 } from './patient.repository';
-import { identityKeyOf } from './search';
+import { identityKeyOf, searchTerms } from './search';
 
 export type { NewPatient };
 export { findPatient, identityKeyOf, listPatientsByBirthDate, listPatientsById, listPatientsByRecordNumber };
@@ -47,4 +48,13 @@ export async function registerPatients(
     })),
   );
   return eyes;
+}
+
+/** Most patients that a search in another list may mean; more than that is no search. */
+const SEARCH_LIMIT = 500;
+
+/** Ids of the patients whom a search means: by name, record number or birth date. */
+export async function findPatientIds(search: string): Promise<string[]> {
+  const patients = await listPatientsAfter(searchTerms(search), undefined, SEARCH_LIMIT);
+  return patients.map(({ id }) => id);
 }

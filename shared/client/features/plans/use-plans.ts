@@ -59,8 +59,7 @@ export function useSignPlan(desk: PlanDesk) {
 
 export function useDiscardPlan(desk: PlanDesk) {
   return useMutation({
-    mutationFn: () =>
-      call(paths.planDiscard(desk.plan.id), planDeskSchema, { method: 'POST', version: desk.plan.version }),
+    mutationFn: () => call(paths.planDiscard(desk.plan.id), planDeskSchema, { method: 'POST' }),
     onSuccess: keepDesk,
   });
 }
