@@ -27,10 +27,10 @@ onSessionChange(() => {
 
 let leaving: Promise<void> = Promise.resolve();
 
-export async function signIn(credentials: { email: string; password: string }): Promise<void> {
+export async function signIn({ email, password }: { email: string; password: string }): Promise<void> {
   // The reply to a sign-out still under way would take the new session's cookie with it.
   await leaving;
-  const session = await call(paths.signIn(), sessionSchema, { method: 'POST', body: credentials });
+  const session = await call(paths.signIn(), sessionSchema, { method: 'POST', body: { email, password } });
   writeStored(UNHEARD_KEY, null);
   removeOldDrafts();
   queryClient.clear();

@@ -2,17 +2,16 @@
  * The frame of every screen: title of the window, one h1 that takes the focus when the screen is reached,
  * a way back, the width of a page, and the standing cautions at its foot.
  */
-import { useCallback, useRef } from 'react';
 import type { ReactNode } from 'react';
 import { ScrollView, View } from 'react-native';
-import type { Text as NativeText } from 'react-native';
 import Head from 'expo-router/head';
-import { router, useFocusEffect } from 'expo-router';
+import { router } from 'expo-router';
 import type { Href } from 'expo-router';
 import { useLayout, useTheme } from '@/shared/client/theme/theme-context';
 import { SPACE } from '@/shared/client/theme/tokens';
 import { Button } from './button';
 import { Text } from './text';
+import { useHeadingFocus } from './use-heading-focus';
 
 interface ScreenProps {
   title: string;
@@ -46,12 +45,7 @@ export function Screen({
 }: ScreenProps) {
   const { colors } = useTheme();
   const { isPhone } = useLayout();
-  const heading = useRef<NativeText>(null);
-  useFocusEffect(
-    useCallback(() => {
-      heading.current?.focus();
-    }, []),
-  );
+  const heading = useHeadingFocus();
   const page = {
     width: '100%',
     maxWidth: WIDTHS[width],

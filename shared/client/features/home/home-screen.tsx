@@ -5,12 +5,12 @@ import { View } from 'react-native';
 import { homeSchema, paths } from '@/shared/contract';
 import type { Home } from '@/shared/contract';
 import { call } from '@/shared/client/api/client';
-import { asProblem } from '@/shared/client/api/problem';
 import { useUser } from '@/shared/client/api/session-store';
 import { Card } from '@/shared/client/components/card';
+import { QueryView } from '@/shared/client/components/query-view';
 import { RowLink } from '@/shared/client/components/row-link';
 import { Screen } from '@/shared/client/components/screen';
-import { ErrorPanel, Loading } from '@/shared/client/components/states';
+import { EmptyState } from '@/shared/client/components/states';
 import { Text } from '@/shared/client/components/text';
 import { formatCount } from '@/shared/client/lib/format';
 import { useLayout } from '@/shared/client/theme/theme-context';
@@ -26,20 +26,27 @@ export function HomeScreen() {
   const { isWide } = useLayout();
   return (
     <Screen title="What waits for you" lead={user.displayName}>
-      {home.isPending ? <Loading lines={6} /> : null}
-      {home.error ? <ErrorPanel problem={asProblem(home.error)} onRetry={() => void home.refetch()} /> : null}
-      {home.data ? (
-        <View style={{ flexDirection: isWide ? 'row' : 'column', flexWrap: 'wrap', gap: SPACE.l }}>
-          {home.data.sections.map((section) => (
-            <View
-              key={section.id}
-              style={isWide ? { flexBasis: '45%', flexGrow: 1, minWidth: 380 } : undefined}
-            >
-              <Section section={section} />
+      <QueryView query={home} label="Looking what waits for you">
+        {({ sections }) =>
+          sections.length === 0 ? (
+            <EmptyState
+              title="Nothing waits for you"
+              hint="Work for your role appears here as eyes move on."
+            />
+          ) : (
+            <View style={{ flexDirection: isWide ? 'row' : 'column', flexWrap: 'wrap', gap: SPACE.l }}>
+              {sections.map((section) => (
+                <View
+                  key={section.id}
+                  style={isWide ? { flexBasis: '45%', flexGrow: 1, minWidth: 380 } : undefined}
+                >
+                  <Section section={section} />
+                </View>
+              ))}
             </View>
-          ))}
-        </View>
-      ) : null}
+          )
+        }
+      </QueryView>
     </Screen>
   );
 }
@@ -62,18 +69,20 @@ function Section({ section }: { section: Home['sections'][number] }) {
       }
     >
       {section.total === 0 ? <Text color="ink2">{section.emptyHint}</Text> : null}
-      <View role="list">
-        {section.items.map((item, index) => (
-          <RowLink
-            key={`${item.href} ${index}`}
-            href={item.href as Href}
-            title={item.title}
-            detail={item.detail}
-            side={item.side}
-            hasRule={index > 0}
-          />
-        ))}
-      </View>
+      {section.items.length === 0 ? null : (
+        <View role="list">
+          {section.items.map((item, index) => (
+            <RowLink
+              key={`${item.href} ${index}`}
+              href={item.href as Href}
+              title={item.title}
+              detail={item.detail}
+              side={item.side}
+              hasRule={index > 0}
+            />
+          ))}
+        </View>
+      )}
       {more > 0 ? <Text color="ink2">{`and ${more} more`}</Text> : null}
     </Card>
   );
