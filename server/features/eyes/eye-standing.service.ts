@@ -1,6 +1,5 @@
 /** Where eyes stand on their way, with the flags that hold them up. For one eye or for a page of patients. */
 import { EYE_STAGE_WORDS, type Eye, type EyeStage, type Flag, type Measurement } from '@/shared/contract';
-
 import { checkMeasurements } from '@/shared/clinical/measurement-checks';
 import type { Transaction } from '@/server/db/write-queue';
 import { listMeasurements, ofRecord } from '@/server/features/measurements/measurement.service';

@@ -3,6 +3,7 @@ import request from 'supertest';
 import { paths, type EyeDesk, type Flag, type Measurement, type PatientDetail } from '@/shared/contract';
 import { AuditEntryModel } from '@/server/db/models/audit-entry';
 import { MeasurementModel } from '@/server/db/models/measurement';
+import { aLens } from '@/tests/support/lenses';
 import { anEntry, answerHistory, PLAIN_HISTORY, register } from '@/tests/support/patients';
 import { startTestApp, type SignedIn, type TestApp } from '@/tests/support/test-app';
 
@@ -335,5 +336,23 @@ describe('stops', () => {
       ['right', 'check'],
       ['left', 'measure'],
     ]);
+  });
+});
+
+describe('the way of the eye', () => {
+  it('goes on with a draft to waiting for a signature', async () => {
+    const administrator = await test.signInAs('administrator');
+    await administrator.post(paths.lenses(), aLens());
+    await enter();
+    await answerHistory(technician, patient.id, 'right');
+
+    const draft = await surgeon.post(paths.eyePlans(patient.id, 'right'), {});
+
+    expect(draft.status).toBe(201);
+    const seen = await desk();
+    expect(seen).toMatchObject({ stage: 'sign', waitsFor: 'Draft waits for a signature' });
+    expect(seen.plans.map(({ status, sequence }) => [status, sequence])).toEqual([['draft', 1]]);
+    const { body } = await technician.get(paths.patient(patient.id));
+    expect(body.eyes[0]).toEqual({ side: 'right', stage: 'sign', waitsFor: 'Draft waits for a signature' });
   });
 });
