@@ -3,7 +3,6 @@ import type { ReactNode } from 'react';
 import { ScrollView, View } from 'react-native';
 import Head from 'expo-router/head';
 import { ChartGround } from '@/shared/client/components/chart-ground';
-import { DemoBanner } from '@/shared/client/components/demo-banner';
 import { Text } from '@/shared/client/components/text';
 import { useHeadingFocus } from '@/shared/client/components/use-heading-focus';
 import { Wordmark } from '@/shared/client/features/shell/wordmark';
@@ -16,11 +15,10 @@ const CHART_FROM_PX = 1280;
 interface EntranceProps {
   title: string;
   lead?: string;
-  isDemo?: boolean;
   children: ReactNode;
 }
 
-export function Entrance({ title, lead, isDemo, children }: EntranceProps) {
+export function Entrance({ title, lead, children }: EntranceProps) {
   const { colors } = useTheme();
   const { widthPx } = useLayout();
   const heading = useHeadingFocus();
@@ -30,7 +28,6 @@ export function Entrance({ title, lead, isDemo, children }: EntranceProps) {
         <title>{`${title} · Landfall`}</title>
       </Head>
       {widthPx >= CHART_FROM_PX ? <ChartGround /> : null}
-      {isDemo ? <DemoBanner /> : null}
       <ScrollView
         role="main"
         contentContainerStyle={{ flexGrow: 1, justifyContent: 'center', padding: SPACE.l }}

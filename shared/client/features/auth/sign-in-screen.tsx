@@ -27,7 +27,7 @@ export function SignInScreen() {
     ? 'You were signed out after 15 quiet minutes. What you were typing is kept.'
     : practice?.name;
   return (
-    <Entrance title="Sign in" lead={lead} isDemo={practice?.isDemo}>
+    <Entrance title="Sign in" lead={lead}>
       <SignInForm />
       {practice && practice.demoAccounts.length > 0 ? (
         <DemoAccounts accounts={practice.demoAccounts} />

@@ -6,6 +6,7 @@ import { SafeAreaProvider } from 'react-native-safe-area-context';
 import { queryClient } from '@/shared/client/api/query-client';
 import { loadFonts } from '@/shared/client/theme/load-fonts';
 import { ThemeProvider } from '@/shared/client/theme/theme-context';
+import { DemoFrame } from './demo-frame';
 
 export function RootLayout() {
   // Words are shown at once in a fallback face: a slow or missing font must not keep anybody from reading.
@@ -16,7 +17,9 @@ export function RootLayout() {
     <SafeAreaProvider>
       <QueryClientProvider client={queryClient}>
         <ThemeProvider>
-          <Stack screenOptions={{ headerShown: false, animation: 'none' }} />
+          <DemoFrame>
+            <Stack screenOptions={{ headerShown: false, animation: 'none' }} />
+          </DemoFrame>
         </ThemeProvider>
       </QueryClientProvider>
     </SafeAreaProvider>

@@ -1,6 +1,6 @@
 /**
- * The frame of the house: a rail on the left of a desk, a bar at the foot of a phone, the demo mark on
- * every screen, and the keys that work everywhere.
+ * The frame of the house: a rail on the left of a desk, a bar at the foot of a phone, and the keys that work
+ * everywhere.
  */
 import { useState } from 'react';
 import type { ReactNode } from 'react';
@@ -9,7 +9,6 @@ import { useQuery } from '@tanstack/react-query';
 import type { SessionUser } from '@/shared/contract';
 import { useLayout, useTheme } from '@/shared/client/theme/theme-context';
 import { practiceQuery } from '@/shared/client/features/auth/use-practice';
-import { DemoBanner } from '@/shared/client/components/demo-banner';
 import { BottomBar } from './bottom-bar';
 import { KeyList } from './key-list';
 import { placesFor } from './places';
@@ -34,7 +33,6 @@ export function Shell({ user, children }: { user: SessionUser; children: ReactNo
         />
       ) : null}
       <View style={{ flex: 1, minWidth: 0, minHeight: 0 }}>
-        {practice?.isDemo ? <DemoBanner /> : null}
         <View role="main" style={{ flex: 1, minHeight: 0 }}>
           {children}
         </View>
