@@ -16,20 +16,7 @@ export function PlanDeskScreen() {
   const query = useQuery(planDeskQuery(planId));
   const desk = query.data;
   return (
-    <Screen
-      title={desk ? `Plan ${desk.plan.sequence}, ${desk.plan.side} eye` : 'Plan'}
-      lead={desk ? leadOf(desk) : undefined}
-      back={
-        desk
-          ? {
-              pathname: '/patients/[patientId]/[side]',
-              params: { patientId: desk.plan.patientId, side: desk.plan.side },
-            }
-          : '/plans'
-      }
-      strip={desk ? <PatientStrip patient={desk.patient} side={desk.plan.side} /> : undefined}
-      width="full"
-    >
+    <Screen {...(desk ? headOf(desk) : { title: 'Plan', back: '/plans' as const })} width="full">
       <QueryView query={query} lines={8} label="Calculating">
         {(loaded) => <DeskOf desk={loaded} />}
       </QueryView>

@@ -1,0 +1,1 @@
+export { ImportScreen as default } from '@/shared/client/features/imports/import-screen';

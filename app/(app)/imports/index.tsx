@@ -1,0 +1,1 @@
+export { ImportsScreen as default } from '@/shared/client/features/imports/imports-screen';

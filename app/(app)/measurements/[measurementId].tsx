@@ -1,0 +1,1 @@
+export { MeasurementScreen as default } from '@/shared/client/features/measurements/measurement-screen';

@@ -1,0 +1,1 @@
+export { EyeScreen as default } from '@/shared/client/features/eyes/eye-screen';

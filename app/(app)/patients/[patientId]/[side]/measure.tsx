@@ -1,0 +1,1 @@
+export { MeasureScreen as default } from '@/shared/client/features/measurements/measure-screen';

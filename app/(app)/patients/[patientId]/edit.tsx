@@ -1,0 +1,1 @@
+export { EditPatientScreen as default } from '@/shared/client/features/patients/edit-patient-screen';

@@ -1,0 +1,1 @@
+export { PatientScreen as default } from '@/shared/client/features/patients/patient-screen';

@@ -1,0 +1,1 @@
+export { PatientsScreen as default } from '@/shared/client/features/patients/patients-screen';

@@ -1,0 +1,1 @@
+export { NewPatientScreen as default } from '@/shared/client/features/patients/new-patient-screen';
