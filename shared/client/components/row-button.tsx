@@ -6,6 +6,10 @@ import { useTheme } from '@/shared/client/theme/theme-context';
 import { SPACE, TOUCH_PX } from '@/shared/client/theme/tokens';
 import { useFocusRing } from './focus-ring';
 
+/** What stands left of the content: a picture above the rows begins there too. */
+const EDGE = { borderPx: 4, paddingPx: SPACE.s };
+export const ROW_EDGE_PX = EDGE.borderPx + EDGE.paddingPx;
+
 interface RowButtonProps {
   label: string;
   isPressed: boolean;
@@ -50,9 +54,9 @@ export function RowButton({
           minHeight: TOUCH_PX,
           borderBottomWidth: 1,
           borderBottomColor: colors.hairline,
-          borderLeftWidth: 4,
+          borderLeftWidth: EDGE.borderPx,
           borderLeftColor: isPressed ? colors.sea : 'transparent',
-          paddingLeft: SPACE.s,
+          paddingLeft: EDGE.paddingPx,
           justifyContent: 'center',
         },
         { ...ring.style, outlineOffset: -3 },

@@ -4,7 +4,7 @@
  * table say the same in words.
  */
 import Svg, { G, Line, Path, Rect } from 'react-native-svg';
-import type { Candidate } from '@/shared/contract';
+import type { Candidate, Prediction } from '@/shared/contract';
 import type { FormulaId } from '@/formulas';
 import { useTheme } from '@/shared/client/theme/theme-context';
 import { FormulaMark } from './formula-mark';
@@ -75,7 +75,7 @@ export function CandidateRowChart(props: CandidateRowChartProps) {
         <Line x1={bar.from} x2={bar.to} y1={MARK_Y_PX} y2={MARK_Y_PX} stroke={colors.ink2} strokeWidth={2} />
       ) : null}
       <G>
-        {candidate.predictions
+        {leadingLast(candidate.predictions, props.leadingFormula)
           .filter((prediction) => isOnAxis(scale, prediction.refractionD))
           .map((prediction) => (
             <FormulaMark
@@ -91,4 +91,9 @@ export function CandidateRowChart(props: CandidateRowChartProps) {
       </G>
     </Svg>
   );
+}
+
+/** Drawn last, the leading formula's mark is never hidden under another. */
+function leadingLast(predictions: readonly Prediction[], leading: FormulaId | null): Prediction[] {
+  return [...predictions].sort((a, b) => Number(a.formula === leading) - Number(b.formula === leading));
 }

@@ -29,6 +29,23 @@ export function DraftDesk({ desk }: { desk: PlanDesk }) {
     change.reset();
     void queryClient.invalidateQueries({ queryKey: planDeskQuery(desk.plan.id).queryKey });
   };
+  const measurement = <EyeInputs desk={desk} />;
+  const inputs = <PlanInputs desk={desk} isBusy={change.isPending} onChange={save} />;
+  const models = desk.calculation.models.map((model) => (
+    <ModelCard
+      key={model.lensId}
+      desk={desk}
+      model={model}
+      isBusy={change.isPending}
+      onChoose={(choice) => save({ choice })}
+    />
+  ));
+  const decision = (
+    <>
+      <FlagsCard desk={desk} />
+      <SignPanel desk={desk} models={desk.calculation.models} />
+    </>
+  );
   return (
     <>
       {change.error ? (
@@ -38,39 +55,46 @@ export function DraftDesk({ desk }: { desk: PlanDesk }) {
           kept="The last change was not taken; everything before it was."
         />
       ) : null}
-      <View style={{ flexDirection: isWide ? 'row' : 'column', gap: SPACE.xl, alignItems: 'stretch' }}>
-        <View style={isWide ? { width: 340, gap: SPACE.l } : { gap: SPACE.l }}>
-          <EyeInputs desk={desk} />
-          <PlanInputs desk={desk} isBusy={change.isPending} onChange={save} />
+      {isWide ? (
+        <View style={{ flexDirection: 'row', gap: SPACE.xl, alignItems: 'stretch' }}>
+          <View style={{ width: 340, gap: SPACE.l }}>
+            {measurement}
+            {inputs}
+          </View>
+          <View style={{ flex: 1, minWidth: 0, gap: SPACE.l }}>
+            {models}
+            {decision}
+          </View>
         </View>
-        <View style={{ flex: isWide ? 1 : undefined, minWidth: 0, gap: SPACE.l }}>
-          {desk.calculation.models.map((model) => (
-            <ModelCard
-              key={model.lensId}
-              desk={desk}
-              model={model}
-              isBusy={change.isPending}
-              onChoose={(choice) => save({ choice })}
-            />
-          ))}
-          <Card title="Flags" aside={<FlagCount desk={desk} />}>
-            {desk.calculation.flags.length === 0 ? (
-              <Text color="ink2">The checks found nothing to weigh.</Text>
-            ) : (
-              <FlagList flags={desk.calculation.flags} />
-            )}
-            <Link
-              href={{
-                pathname: '/patients/[patientId]/[side]',
-                params: { patientId: desk.plan.patientId, side: desk.plan.side },
-              }}
-              label="Settle flags and history on the eye's page"
-            />
-          </Card>
-          <SignPanel desk={desk} models={desk.calculation.models} />
+      ) : (
+        // On a phone what is compared comes first; what it was calculated from can wait.
+        <View style={{ gap: SPACE.l }}>
+          {models}
+          {inputs}
+          {decision}
+          {measurement}
         </View>
-      </View>
+      )}
     </>
+  );
+}
+
+function FlagsCard({ desk }: { desk: PlanDesk }) {
+  return (
+    <Card title="Flags" aside={<FlagCount desk={desk} />}>
+      {desk.calculation.flags.length === 0 ? (
+        <Text color="ink2">The checks found nothing to weigh.</Text>
+      ) : (
+        <FlagList flags={desk.calculation.flags} />
+      )}
+      <Link
+        href={{
+          pathname: '/patients/[patientId]/[side]',
+          params: { patientId: desk.plan.patientId, side: desk.plan.side },
+        }}
+        label="Settle flags and history on the eye's page"
+      />
+    </Card>
   );
 }
 

@@ -8,6 +8,7 @@ import type { Candidate, ModelCalculation } from '@/shared/contract';
 import { Text } from '@/shared/client/components/text';
 import { useLayout, useTheme } from '@/shared/client/theme/theme-context';
 import { SPACE } from '@/shared/client/theme/tokens';
+import { ROW_EDGE_PX } from '@/shared/client/components/row-button';
 import { CandidateRow } from './candidate-row';
 import { FormulaLegend } from './formula-legend';
 import { refractionScale } from './landing-geometry';
@@ -32,7 +33,7 @@ export function LandingChart(props: LandingChartProps) {
   const { isPhone } = useLayout();
   const [widthPx, setWidthPx] = useState(0);
   const rows = useRef<(View | null)[]>([]);
-  const chartPx = Math.max(isPhone ? widthPx : widthPx - POWER_COLUMN_PX - CHANCE_COLUMN_PX, 120);
+  const chartPx = Math.max(widthPx - ROW_EDGE_PX - (isPhone ? 0 : POWER_COLUMN_PX + CHANCE_COLUMN_PX), 120);
   const scale = refractionScale(model.candidates, targetD, chartPx);
   const narrowestSdD = Math.min(...model.candidates.map((candidate) => candidate.landing.sdD));
   const focusRow = (index: number) =>
@@ -60,7 +61,7 @@ export function LandingChart(props: LandingChartProps) {
       />
       {widthPx > 0 ? (
         <View>
-          <View style={{ flexDirection: 'row', alignItems: 'flex-end' }}>
+          <View style={{ flexDirection: 'row', alignItems: 'flex-end', paddingLeft: ROW_EDGE_PX }}>
             {isPhone ? null : <ColumnTitle widthPx={POWER_COLUMN_PX} title="Lens power (D)" />}
             <RefractionAxis scale={scale} widthPx={chartPx} targetD={targetD} />
             {isPhone ? null : (

@@ -5,6 +5,7 @@ import { formatDioptres } from '@/shared/client/lib/format';
 import type { RefractionScale } from './landing-geometry';
 
 const HEIGHT_PX = 40;
+const HALF_LABEL_PX = 18;
 
 export function RefractionAxis({
   scale,
@@ -16,6 +17,8 @@ export function RefractionAxis({
   targetD: number;
 }) {
   const { colors, fonts } = useTheme();
+  const isAtEdge = (tickD: number) =>
+    scale.x(tickD) < HALF_LABEL_PX || scale.x(tickD) > widthPx - HALF_LABEL_PX;
   const isNearTarget = (tickD: number) => Math.abs(scale.x(tickD) - scale.x(targetD)) < 34;
   return (
     <Svg width={widthPx} height={HEIGHT_PX} aria-hidden>
@@ -39,9 +42,9 @@ export function RefractionAxis({
             stroke={colors.line}
             strokeWidth={1}
           />
-          {isNearTarget(tickD) && tickD !== targetD ? null : (
+          {isAtEdge(tickD) || (isNearTarget(tickD) && tickD !== targetD) ? null : (
             <SvgText
-              x={clampLabel(scale.x(tickD), widthPx, 18)}
+              x={scale.x(tickD)}
               y={HEIGHT_PX - 9}
               fontSize={13}
               textAnchor="middle"
