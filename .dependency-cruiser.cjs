@@ -1,7 +1,6 @@
 /**
  * Who may import whom. The table stands in DEVELOPERS.md; `npm test` enforces it here.
  */
-const OUTSIDE_FORMULAS = '^(app|server|shared|assets|tests)/';
 const NATIVE_UI = 'node_modules/(expo|expo-[^/]+|@expo|react-native|react-native-[^/]+|react|react-dom)/';
 const SERVER_LIBS =
   'node_modules/(express|sequelize|sqlite3|passport|passport-jwt|jsonwebtoken|pdfkit|nodemailer|multer|pino)/';

@@ -26,6 +26,12 @@ module.exports = [
       eqeqeq: 'error',
     },
   },
+  {
+    files: ['*.js', '*.cjs'],
+    languageOptions: {
+      globals: { __dirname: 'readonly', module: 'writable', require: 'readonly', process: 'readonly' },
+    },
+  },
   // Screens and components are mostly markup; tests are lists of cases.
   {
     files: ['shared/client/**/*.tsx'],

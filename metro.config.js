@@ -16,7 +16,13 @@ config.resolver.resolveRequest = (context, moduleName, platform) => {
 const API_PORT = Number(process.env.PORT ?? 3000);
 config.server.enhanceMiddleware = (metro) => (request, response, next) => {
   if (!request.url.startsWith('/api/')) return metro(request, response, next);
-  const options = { host: 'localhost', port: API_PORT, path: request.url, method: request.method, headers: request.headers };
+  const options = {
+    host: 'localhost',
+    port: API_PORT,
+    path: request.url,
+    method: request.method,
+    headers: request.headers,
+  };
   const upstream = http.request(options, (reply) => {
     response.writeHead(reply.statusCode ?? 502, reply.headers);
     reply.pipe(response);

@@ -18,7 +18,7 @@ import { DecimalField, TextField } from '@/shared/client/components/field';
 import { Text } from '@/shared/client/components/text';
 import { formatKeratometry, formatMm } from '@/shared/client/lib/format';
 import { SPACE } from '@/shared/client/theme/tokens';
-import type { MeasureText } from './measure-form';
+import type { MeasureText } from './measure-text';
 
 interface MeasureFieldsProps {
   form: UseFormReturn<MeasureText>;

@@ -2,13 +2,7 @@
 import { useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { useMutation } from '@tanstack/react-query';
-import {
-  localDateOf,
-  measurementSchema,
-  MEASUREMENT_TEXT_FIELDS,
-  paths,
-  readMeasurement,
-} from '@/shared/contract';
+import { localDateOf, measurementSchema, paths, readMeasurement } from '@/shared/contract';
 import type { EyeDesk, MeasurementTextField } from '@/shared/contract';
 import { call } from '@/shared/client/api/client';
 import { asProblem } from '@/shared/client/api/problem';
@@ -20,19 +14,20 @@ import { FormErrors } from '@/shared/client/components/form-error-summary';
 import { ErrorPanel } from '@/shared/client/components/states';
 import { Text } from '@/shared/client/components/text';
 import { useFormDraft } from '@/shared/client/lib/use-form-draft';
+import { EMPTY_MEASURE_TEXT } from './measure-text';
+import type { MeasureText } from './measure-text';
 import { MeasureFields } from './measure-fields';
 import { SupersedeCard } from './supersede-card';
-
-export type MeasureText = Record<MeasurementTextField | 'reason' | 'supersedesId', string>;
-
-const EMPTY = Object.fromEntries(
-  [...MEASUREMENT_TEXT_FIELDS, 'reason', 'supersedesId'].map((field) => [field, '']),
-) as MeasureText;
 
 export function MeasureForm({ desk, onDone }: { desk: EyeDesk; onDone: () => void }) {
   const { patient, eye } = desk;
   const form = useForm<MeasureText>({
-    defaultValues: { ...EMPTY, method: 'optical', keratometricIndex: '1.3375', acdFrom: 'epithelium' },
+    defaultValues: {
+      ...EMPTY_MEASURE_TEXT,
+      method: 'optical',
+      keratometricIndex: '1.3375',
+      acdFrom: 'epithelium',
+    },
   });
   const draft = useFormDraft(form, `measurement/${patient.id}/${eye.side}`);
   const [problems, setProblems] = useState<{ field: string; message: string }[]>([]);

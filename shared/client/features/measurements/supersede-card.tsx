@@ -7,7 +7,7 @@ import { Card } from '@/shared/client/components/card';
 import { TextField } from '@/shared/client/components/field';
 import { Select } from '@/shared/client/components/select';
 import { formatDate, formatMm } from '@/shared/client/lib/format';
-import type { MeasureText } from './measure-form';
+import type { MeasureText } from './measure-text';
 
 export function SupersedeCard({
   form,
