@@ -1,6 +1,7 @@
 import { existsSync, statSync } from 'node:fs';
 import { join } from 'node:path';
 import { readConfig, type Config } from '@/server/config';
+import { DEMO_PRACTICE_NAME } from '@/server/db/seeds/seed-demo';
 import { AccountModel } from '@/server/db/models/account';
 import { createLogger } from '@/server/http/logging';
 import { startServer, type RunningServer } from '@/server/start';
@@ -25,7 +26,7 @@ describe('starting and stopping', () => {
     const { demoAccounts, ...rest } = await practice();
 
     expect(rest).toEqual({
-      name: 'Landfall demonstration practice',
+      name: DEMO_PRACTICE_NAME,
       isDemo: true,
       needsFirstAdministrator: false,
     });
@@ -44,7 +45,7 @@ describe('starting and stopping', () => {
       expect(reply.status).toBe(200);
     }
     expect(statSync(config.dataFolder).mode & 0o777).toBe(0o700);
-  });
+  }, 30_000);
 
   it('stops with everything in one file', async () => {
     await server.stop();

@@ -3,34 +3,36 @@
  * seeded generator round published population means (axial length 23.49 mm, keratometry 44.26 D, chamber
  * depth 3.10 mm, lens thickness 4.52 mm), the two eyes of a person alike but never equal.
  */
-import { randomFromSeed } from '@/formulas';
-import type { RandomSource } from '@/formulas';
-import { DEMO_CASES } from './demo-cases';
-import type { DemoCase } from './demo-cases';
-import type { DemoEye, DemoPerson } from './demo-eye';
+import { randomFromSeed, type RandomSource } from '@/formulas';
+import { draft, person, signed, type DemoCase } from './demo-case';
+import { CATARACT_CASES } from './demo-cases-cataracts';
+import { CORNEA_CASES } from './demo-cases-corneas';
+import { COURSE_CASES } from './demo-cases-course';
+import { RECORD_CASES } from './demo-cases-records';
+import { SHAPE_CASES } from './demo-cases-shapes';
+import type { DemoEye } from './demo-eye';
 
 const SEED = 20260115;
+const FIRST_ORDINARY_RECORD = 201;
 
 const NAMES = [
-  'Abbotsey, Lena',
-  'Birchmoor, Anton',
-  'Coveley, Marta',
-  'Drystone, Pavel',
-  'Elmsway, Ingrid',
-  'Fordmere, Luka',
-  'Grantley, Ebele',
-  'Heronsby, Vera',
-  'Ivywell, Dmitri',
-  'Juniperly, Sunniva',
-  'Kilnworth, Amara',
-  'Larkmoor, Pieter',
-  'Millbeck, Rana',
-  'Northey, Gustav',
-  'Osierford, Lucia',
-  'Pebbleton, Matteo',
-  'Quarrier, Hana',
-  'Reedham, Idris',
+  ['Bojsen-Marehalm', 'Lars-Erik'],
+  ['Brisenoire', 'Élodie'],
+  ['Coveley', 'Yuki'],
+  ['Drystone', 'Pavel'],
+  ['Fordmere', 'Emeka'],
+  ['Gavotte-Seabright', 'Maria-Konstantina'],
+  ['Heronsby', 'Vera'],
+  ['Kilnworth', 'Tariq'],
+  ['Larkmoor', 'Mei-Lin'],
+  ['Millbeck', 'Rana'],
+  ['Osierford', 'Mateus'],
+  ['Pebbleton', 'Eun-ji'],
+  ['Reedham', 'Idris'],
 ] as const;
+
+/** Days on which files came in; eyes are measured on one of them. */
+const CLINIC_DAYS_AGO = [47, 33, 26, 19, 12, 5] as const;
 
 const clamp = (value: number, low: number, high: number): number => Math.min(Math.max(value, low), high);
 const hundredths = (value: number): number => Number(value.toFixed(2));
@@ -38,63 +40,87 @@ const hundredths = (value: number): number => Number(value.toFixed(2));
 export function demoCohort(): DemoCase[] {
   const random = randomFromSeed(SEED);
   const ordinary = NAMES.map((name, index) => ordinaryCase(random, name, index));
-  return [...DEMO_CASES, ...ordinary];
+  return [...SHAPE_CASES, ...CORNEA_CASES, ...CATARACT_CASES, ...RECORD_CASES, ...COURSE_CASES, ...ordinary];
 }
 
-function ordinaryCase(random: RandomSource, name: string, index: number): DemoCase {
-  const [family = '', given = ''] = name.split(', ');
-  const sex = index % 2 === 0 ? 'female' : 'male';
-  const person: DemoPerson = {
-    record: `D-${201 + index}`.replace('D-', 'D-0'),
-    family,
-    given,
-    born: birthDate(random),
-    sex,
+function ordinaryCase(
+  random: RandomSource,
+  [family, given]: readonly [string, string],
+  index: number,
+): DemoCase {
+  const sex = index % 2 === 0 ? 'male' : 'female';
+  const record = `D-0${FIRST_ORDINARY_RECORD + index}`;
+  const daysAgo = CLINIC_DAYS_AGO[index % CLINIC_DAYS_AGO.length] ?? 5;
+  const right = { ...ordinaryEye(random), daysAgo };
+  return {
+    story: 'ordinary eyes',
+    person: person(record, `${family}, ${given}`, [birthDate(random), sex]),
+    right,
+    left: fellowOf(random, right),
+    plan: planOf(index, daysAgo),
   };
-  const right = ordinaryEye(random);
-  return { story: 'an ordinary eye', person, right, left: fellowOf(random, right), plan: planOf(index) };
 }
 
 /** Some eyes are signed, some drafted, most still wait. */
-function planOf(index: number): DemoCase['plan'] {
-  if (index < 5) return { right: 'signed' };
-  if (index < 7) return { right: 'signed', left: 'draft' };
+function planOf(index: number, daysAgo: number): DemoCase['plan'] {
+  if (index === 1) return { right: signed(daysAgo - 3, 'Lantern Three Distances', 0) };
+  if (index === 3) return { right: signed(daysAgo - 3), left: signed(daysAgo - 3) };
+  if (index < 5) return { right: signed(daysAgo - 3) };
+  if (index < 7) return { right: draft(2) };
   return undefined;
 }
 
 function birthDate(random: RandomSource): string {
-  const year = 1938 + Math.floor(random.uniform() * 27);
-  const month = 1 + Math.floor(random.uniform() * 12);
-  const day = 1 + Math.floor(random.uniform() * 28);
-  return `${year}-${String(month).padStart(2, '0')}-${String(day).padStart(2, '0')}`;
+  const two = (value: number): string => String(value).padStart(2, '0');
+  const year = 1938 + random.integerBelow(27);
+  const month = 1 + random.integerBelow(12);
+  return `${year}-${two(month)}-${two(1 + random.integerBelow(28))}`;
 }
 
+/** Longer eyes are flatter and deeper, deeper eyes have thinner lenses. */
 function ordinaryEye(random: RandomSource): DemoEye {
-  const meanKD = clamp(44 + 1.1 * random.normal(), 41.6, 46.4);
-  const cylinderD = clamp(0.75 + 0.35 * Math.abs(random.normal()), 0.4, 1.9);
+  const axialLengthMm = clamp(23.49 + 0.75 * random.normal(), 22.1, 25.2);
+  const longerMm = axialLengthMm - 23.49;
+  const meanKD = clamp(44.1 - 0.45 * longerMm + 1.1 * random.normal(), 41.6, 46.4);
+  const cylinderD = clamp(0.75 + 0.35 * random.normal(), 0.4, 1.9);
+  const acdMm = clamp(3.1 + 0.17 * longerMm + 0.25 * random.normal(), 2.55, 3.6);
   return {
-    axialLengthMm: hundredths(clamp(23.5 + 0.75 * random.normal(), 22.1, 25.2)),
+    axialLengthMm: hundredths(axialLengthMm),
     flatKD: hundredths(meanKD - cylinderD / 2),
     steepKD: hundredths(meanKD + cylinderD / 2),
-    steepAxisDeg: Math.round(clamp(90 + 12 * random.normal(), 60, 120)),
-    acdMm: hundredths(clamp(3.1 + 0.25 * random.normal(), 2.55, 3.6)),
-    lensThicknessMm: hundredths(clamp(4.5 + 0.25 * random.normal(), 3.9, 4.95)),
+    steepAxisDeg: steepAxisDeg(random),
+    acdMm: hundredths(acdMm),
+    lensThicknessMm: hundredths(clamp(4.5 - 0.4 * (acdMm - 3.1) + 0.22 * random.normal(), 3.9, 4.95)),
     cornealThicknessUm: Math.round(clamp(545 + 30 * random.normal(), 480, 610)),
     whiteToWhiteMm: hundredths(clamp(11.8 + 0.3 * random.normal(), 11, 12.6)),
-    daysAgo: 5 + Math.floor(random.uniform() * 60),
   };
+}
+
+/** Mostly with the rule, in some against it. */
+function steepAxisDeg(random: RandomSource): number {
+  const middleDeg = random.uniform() < 0.65 ? 90 : 180;
+  return wholeAxis(middleDeg + clamp(8 * random.normal(), -20, 20));
 }
 
 /** The other eye of the same person: close, mirrored in its axis. */
 function fellowOf(random: RandomSource, eye: DemoEye): DemoEye {
-  const shiftKD = 0.2 * random.normal();
+  const shiftKD = clamp(0.2 * random.normal(), -0.5, 0.5);
+  const shifted = (value: number | undefined, sd: number): number =>
+    (value ?? 0) + clamp(sd * random.normal(), -2 * sd, 2 * sd);
   return {
     ...eye,
     axialLengthMm: hundredths(eye.axialLengthMm + clamp(0.1 * random.normal(), -0.25, 0.25) + 0.01),
     flatKD: hundredths(eye.flatKD + shiftKD),
     steepKD: hundredths(eye.steepKD + shiftKD + 0.05),
-    steepAxisDeg: Math.round(clamp(180 - eye.steepAxisDeg + 4 * random.normal(), 55, 125)),
-    acdMm: hundredths((eye.acdMm ?? 3.1) + 0.03 * random.normal()),
-    lensThicknessMm: hundredths((eye.lensThicknessMm ?? 4.5) + 0.04 * random.normal()),
+    steepAxisDeg: wholeAxis(180 - eye.steepAxisDeg + clamp(4 * random.normal(), -10, 10)),
+    acdMm: hundredths(shifted(eye.acdMm, 0.03)),
+    lensThicknessMm: hundredths(shifted(eye.lensThicknessMm, 0.04)),
+    cornealThicknessUm: Math.round(shifted(eye.cornealThicknessUm, 4)),
+    whiteToWhiteMm: hundredths(shifted(eye.whiteToWhiteMm, 0.05)),
   };
+}
+
+function wholeAxis(axisDeg: number): number {
+  const whole = Math.round(axisDeg) % 180;
+  return whole > 0 ? whole : whole + 180;
 }

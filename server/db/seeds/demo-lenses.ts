@@ -1,7 +1,7 @@
 /**
  * The lens catalogue of the demonstration. Every model is invented. Constants agree with each other by the
- * published conversions between formulas (Holladay 1988), and Haigis is set so that it agrees with SRK/T at
- * an average eye, as optimised constants do.
+ * published conversions between formulas (Holladay 1988), and Haigis is set so that it gives an average eye the
+ * mean power of the other formulas, as optimised constants do.
  */
 import {
   pAcdFromAConstant,
@@ -10,8 +10,10 @@ import {
   surgeonFactorFromAConstant,
 } from '@/formulas';
 import type { ConstantOrigin, LensConstant, LensInput, PowerRange } from '@/shared/contract';
+import { BACKUP_LENS, EVERYDAY_LENS } from './demo-case';
 
 const SOURCE = 'invented for the demonstration';
+const MARK = 'Invented model of the demonstration';
 const DATED = '2026-01-15';
 const AVERAGE_EYE = {
   axialLengthMm: 23.5,
@@ -23,21 +25,32 @@ const HAIGIS_SLOPES = { a1: 0.4, a2: 0.1 };
 /** An ultrasound length ends at the front of the retina and is shorter: the same lens has a lower constant. */
 const ULTRASOUND_SHIFT_A = -0.35;
 
-/** a0 with which Haigis predicts what SRK/T predicts at the average eye; found by halving, to 0.0005 mm. */
+/** a0 with which Haigis gives the average eye the mean power of the others; found by halving, to 0.0005 mm. */
 export function haigisA0Mm(aConstant: number): number {
-  const { powerD } = powerForRefraction('srkt', AVERAGE_EYE, 0, { aConstant });
+  const powerD = meanPowerD(aConstant);
   let [lowMm, highMm] = [-4, 4];
   while (highMm - lowMm > 0.0005) {
     const middleMm = (lowMm + highMm) / 2;
-    const { refractionD } = predictRefraction('haigis', AVERAGE_EYE, powerD, {
-      a0Mm: middleMm,
-      ...HAIGIS_SLOPES,
-    });
+    const constants = { a0Mm: middleMm, ...HAIGIS_SLOPES };
+    const { refractionD } = predictRefraction('haigis', AVERAGE_EYE, powerD, constants);
     // A deeper lens leaves the eye more farsighted.
     if (refractionD < 0) lowMm = middleMm;
     else highMm = middleMm;
   }
   return round((lowMm + highMm) / 2, 3);
+}
+
+/** For emmetropia, of all formulas but Haigis. */
+function meanPowerD(aConstant: number): number {
+  const powersD = [
+    powerForRefraction('srkt', AVERAGE_EYE, 0, { aConstant }),
+    powerForRefraction('t2', AVERAGE_EYE, 0, { aConstant }),
+    powerForRefraction('holladay1', AVERAGE_EYE, 0, {
+      surgeonFactorMm: surgeonFactorFromAConstant(aConstant),
+    }),
+    powerForRefraction('hofferQ', AVERAGE_EYE, 0, { pAcdMm: pAcdFromAConstant(aConstant) }),
+  ].map(({ powerD }) => powerD);
+  return powersD.reduce((sum, powerD) => sum + powerD, 0) / powersD.length;
 }
 
 const round = (value: number, decimals: number): number => Number(value.toFixed(decimals));
@@ -75,12 +88,12 @@ const CYLINDERS = [1, 1.5, 2.25, 3, 3.75, 4.5];
 
 type Model = Pick<LensInput, 'name' | 'kind' | 'constants'> & Partial<LensInput>;
 
-const model = (facts: Model): LensInput => ({
+const model = ({ remarks, ...facts }: Model): LensInput => ({
   isToric: false,
   design: 'one-piece',
   powerRanges: USUAL,
   cylinderStepsD: [],
-  remarks: '',
+  remarks: remarks === undefined ? MARK : `${MARK}: ${remarks}`,
   isRetired: false,
   ...facts,
 });
@@ -88,10 +101,10 @@ const toric = (facts: Model): LensInput => model({ isToric: true, cylinderStepsD
 
 export function demoLenses(): LensInput[] {
   return [
-    model({ name: 'Pilot Mono', kind: 'monofocal', powerRanges: WIDE, constants: bothOrigins(118.9) }),
+    model({ name: EVERYDAY_LENS, kind: 'monofocal', powerRanges: WIDE, constants: bothOrigins(118.9) }),
     toric({ name: 'Pilot Mono Toric', kind: 'monofocal', constants: bothOrigins(118.9) }),
     model({
-      name: 'Anchor Three',
+      name: BACKUP_LENS,
       kind: 'monofocal',
       design: 'three-piece',
       powerRanges: WIDE,
@@ -125,6 +138,27 @@ export function demoLenses(): LensInput[] {
       powerRanges: [{ fromD: 30, toD: 40, stepD: 1 }],
       constants: bothOrigins(118.7).filter(({ formula }) => formula !== 'haigis'),
     }),
-    model({ name: 'Old Pilot', kind: 'monofocal', constants: bothOrigins(118.4), isRetired: true }),
+    model({
+      name: 'Keel Low Power',
+      kind: 'monofocal',
+      powerRanges: [
+        { fromD: -12, toD: -5, stepD: 1 },
+        { fromD: -5, toD: 10, stepD: 0.5 },
+      ],
+      constants: bothOrigins(118.7),
+      remarks: 'for long eyes; minus powers',
+    }),
+    model({
+      name: 'Old Pilot',
+      kind: 'monofocal',
+      constants: bothOrigins(118.4),
+      remarks: 'no longer supplied',
+      isRetired: true,
+    }),
   ];
+}
+
+/** What was recorded of the everyday lens before its constants were corrected: a model has a history. */
+export function everydayLensBefore(): LensInput {
+  return model({ name: EVERYDAY_LENS, kind: 'monofocal', powerRanges: WIDE, constants: bothOrigins(118.8) });
 }

@@ -1,49 +1,60 @@
 /** Fills a new database with the invented practice of the demonstration, in one transaction: all or nothing. */
-import { localDateOf } from '@/shared/contract';
-import type { Role } from '@/shared/contract';
-import { inAct, type Act, type Actor, type AnyAct } from '@/server/act';
+import { localDateOf, type Role } from '@/shared/contract';
+import { inAct, type Actor, type AnyAct } from '@/server/act';
+import { recordAudit } from '@/server/audit/writer';
 import type { Deps } from '@/server/deps';
 import { DEMO_ACCOUNTS } from '@/server/db/seeds/demo-accounts';
 import { addActiveAccount } from '@/server/features/accounts/account.service';
 import { hashPassword } from '@/server/features/auth/password';
-import { sha256Of, storeFileAtOnce } from '@/server/features/imports/import.service';
-import { createLens } from '@/server/features/lenses/lens.service';
 import { storePractice } from '@/server/features/practice/practice.service';
-import { seedBiometryCsv } from './demo-biometry';
-import { demoLenses } from './demo-lenses';
-import { seedHistories, seedRegistrations } from './seed-patients';
+import { demoCohort } from './demo-cohort';
+import { clinicMoment } from './demo-days';
+import { lensSteps } from './seed-lenses';
+import { fileSteps, historySteps, registrationStep, remeasurementSteps } from './seed-patients';
+import { planSteps, settlementSteps } from './seed-plans';
+import type { SeedStep } from './seed-step';
 
-const DEMO_PRACTICE = { name: 'Landfall demonstration practice', isDemo: true };
+export const DEMO_PRACTICE_NAME = 'Saltfern Harbour Eye Practice (demo)';
+const OPENED_DAYS_AGO = 960;
 
 export async function seedDemo(deps: Deps): Promise<void> {
   // Hashing and calculating stay outside of the transaction.
   const passwordHashes = await Promise.all(DEMO_ACCOUNTS.map(({ password }) => hashPassword(password)));
-  const lenses = demoLenses();
-  const biometry = seedBiometryCsv(localDateOf(deps.clock.now()));
-  const file = { name: 'demonstration-biometry.csv', bytes: biometry, sha256: sha256Of(biometry) };
+  const demoDay = localDateOf(deps.clock.now());
+  const steps = stepsOf(deps, demoDay);
   await inAct(deps, { actor: null, requestId: null }, async (act) => {
-    const actors = await seedAccounts(act, passwordHashes);
-    await storePractice(act, DEMO_PRACTICE);
-    const technician = as(act, actors.technician);
-    for (const lens of lenses) await createLens(as(act, actors.administrator), lens, { isDemo: true });
-    await storeFileAtOnce(deps, technician, file);
-    await seedHistories(technician);
-    await seedRegistrations(technician);
+    const opening = { ...act, at: clinicMoment(demoDay, OPENED_DAYS_AGO, '08:00') };
+    const actors = await seedAccounts(opening, passwordHashes);
+    await storePractice(act, { name: DEMO_PRACTICE_NAME, isDemo: true, demoDay });
+    for (const { at, by, perform } of steps) await perform({ ...act, at, actor: actors[by] });
+    // Said in the trail itself: its earlier entries tell of an invented past.
+    await recordAudit(act, {
+      action: 'demo.fill',
+      noun: 'practice',
+      detail: { demoDay, acts: steps.length },
+    });
   });
 }
 
-/** The same act in somebody's name, so that the audit trail names who would have done it. */
-const as = (act: AnyAct, actor: Actor): Act => ({ ...act, actor });
+function stepsOf(deps: Deps, demoDay: string): SeedStep[] {
+  const cases = demoCohort();
+  const steps = [
+    ...lensSteps(demoDay),
+    ...fileSteps(deps, cases, demoDay),
+    ...historySteps(cases, demoDay),
+    ...remeasurementSteps(cases, demoDay),
+    registrationStep(demoDay),
+    ...settlementSteps(cases, demoDay),
+    ...planSteps(cases, demoDay),
+  ];
+  return steps.sort((a, b) => (a.at < b.at ? -1 : a.at > b.at ? 1 : 0));
+}
 
 async function seedAccounts(act: AnyAct, passwordHashes: readonly string[]): Promise<Record<Role, Actor>> {
   const actors: Partial<Record<Role, Actor>> = {};
   for (const [index, { email, displayName, roles }] of DEMO_ACCOUNTS.entries()) {
-    const { id } = await addActiveAccount(act, {
-      email,
-      displayName,
-      roles,
-      passwordHash: passwordHashes[index] ?? '',
-    });
+    const passwordHash = passwordHashes[index] ?? '';
+    const { id } = await addActiveAccount(act, { email, displayName, roles, passwordHash });
     for (const role of roles) actors[role] = { id, displayName, roles, sessionFamilyId: 'demonstration' };
   }
   return actors as Record<Role, Actor>;

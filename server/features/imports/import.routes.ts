@@ -53,8 +53,9 @@ function sampleRoutes(deps: Deps): Route[] {
       summary: 'Biometry of invented people; only in the demonstration',
       reply: CSV,
       handle: async () => {
-        if (!(await getPractice()).isDemo) throw new ProblemError('not-found');
-        const bytes = demoBiometryCsv(localDateOf(deps.clock.now()));
+        const { isDemo, demoDay } = await getPractice();
+        if (!isDemo) throw new ProblemError('not-found');
+        const bytes = demoBiometryCsv(demoDay ?? localDateOf(deps.clock.now()));
         return file({ bytes, contentType: CSV, fileName: 'landfall-demo-biometry.csv' });
       },
     }),

@@ -207,7 +207,7 @@ async function snapshotOf(act: Act, { plan, patient, eye, measurement, lenses, c
     schema: 1 as const,
     planId: plan.id,
     sequence: plan.sequence,
-    practiceName: (await getPractice()).name,
+    practiceName: (await getPractice(act.transaction)).name,
     patient,
     eye,
     measurement,
