@@ -3,6 +3,7 @@ import { FORMULA_VERSION } from '@/formulas';
 import { Button } from '@/shared/client/components/button';
 import { Card, Row } from '@/shared/client/components/card';
 import { RadioGroup } from '@/shared/client/components/choices';
+import { Link } from '@/shared/client/components/link';
 import { Screen } from '@/shared/client/components/screen';
 import { Facts } from '@/shared/client/components/table';
 import { Text } from '@/shared/client/components/text';
@@ -53,6 +54,7 @@ export function AboutScreen() {
             { label: 'Formula version', value: FORMULA_VERSION, isNumber: true },
           ]}
         />
+        <Link href="/method" label="Methods: formulas, checks and their sources" />
       </Card>
       <Row>
         <Button label="Sign out" onPress={() => void signOut()} />

@@ -6,6 +6,7 @@ import { useUser } from '@/shared/client/api/session-store';
 import { Button } from '@/shared/client/components/button';
 import { Card } from '@/shared/client/components/card';
 import { FlagList } from '@/shared/client/components/flag-list';
+import { Link } from '@/shared/client/components/link';
 import { Text } from '@/shared/client/components/text';
 import { SettleDialog } from './settle-dialog';
 
@@ -25,6 +26,7 @@ export function EyeFlags({ desk }: { desk: EyeDesk }) {
       {desk.measurements.length > 0 && desk.flags.length === 0 ? (
         <Text color="ink2">The checks found nothing to weigh.</Text>
       ) : null}
+      <Link href="/method" label="Where these checks come from" />
       <FlagList flags={desk.flags} actionFor={actionFor} />
       {settling ? <SettleDialog desk={desk} flag={settling} onClose={() => setSettling(undefined)} /> : null}
     </Card>

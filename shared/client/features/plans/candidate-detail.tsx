@@ -3,6 +3,7 @@ import { View } from 'react-native';
 import { FORMULA_NAMES } from '@/shared/contract';
 import type { Candidate, ModelCalculation, Prediction } from '@/shared/contract';
 import { formulaFacts } from '@/formulas';
+import { Link } from '@/shared/client/components/link';
 import { DataTable } from '@/shared/client/components/table';
 import type { Column } from '@/shared/client/components/table';
 import { Text } from '@/shared/client/components/text';
@@ -36,6 +37,7 @@ export function CandidateDetail({ model, candidate, stepD }: CandidateDetailProp
           .map((part) => `${part.source} ${formatDecimals(part.sdD, 2)}`)
           .join('; ')}.`}
       </Text>
+      <Link href="/method" label="How each formula works and how far it was checked" />
       {candidate.predictions.map((prediction) => (
         <FormulaCautions key={prediction.formula} prediction={prediction} />
       ))}

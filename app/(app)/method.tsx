@@ -1,0 +1,1 @@
+export { MethodScreen as default } from '@/shared/client/features/method/method-screen';
