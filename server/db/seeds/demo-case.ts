@@ -33,7 +33,8 @@ export interface DemoSettlement {
 }
 
 export interface DemoPlan {
-  isSigned: boolean;
+  /** Open: inputs only. Chosen: with lens and power, ready to be signed. */
+  state: 'open' | 'chosen' | 'signed';
   daysAgo: number;
   /** The model chosen, or the one at hand while nothing is chosen. */
   lensName: string;
@@ -45,14 +46,18 @@ export const EVERYDAY_LENS = 'Pilot Mono';
 export const BACKUP_LENS = 'Anchor Three';
 
 export const signed = (daysAgo: number, lensName = EVERYDAY_LENS, targetD = -0.25): DemoPlan => ({
-  isSigned: true,
+  state: 'signed',
   daysAgo,
   lensName,
   targetD,
 });
 export const draft = (daysAgo: number, lensName = EVERYDAY_LENS, targetD = -0.25): DemoPlan => ({
   ...signed(daysAgo, lensName, targetD),
-  isSigned: false,
+  state: 'open',
+});
+export const chosen = (daysAgo: number, lensName = EVERYDAY_LENS, targetD = -0.25): DemoPlan => ({
+  ...signed(daysAgo, lensName, targetD),
+  state: 'chosen',
 });
 
 export const person = (

@@ -101,6 +101,7 @@ export const CORNEA_CASES: readonly DemoCase[] = [
       right: { cornealSurgery: 'yes', cornealSurgeryKind: 'myopic-laser' },
       left: { cornealSurgery: 'yes', cornealSurgeryKind: 'myopic-laser' },
     },
+    plan: { right: draft(7) },
   },
   {
     story: 'laser for farsightedness in one eye',

@@ -2,7 +2,7 @@
  * Eyes that have gone some way: measured again, signed, out of date, the second after the first. All people are
  * invented.
  */
-import { draft, person, signed, type DemoCase } from './demo-case';
+import { chosen, draft, person, signed, type DemoCase } from './demo-case';
 
 const swappedRight = {
   axialLengthMm: 22.93,
@@ -127,7 +127,7 @@ export const COURSE_CASES: readonly DemoCase[] = [
     plan: { right: signed(19) },
   },
   {
-    story: 'first eye signed, second eye in draft, a lens with extended depth of focus in both',
+    story: 'first eye signed, second eye ready to be signed, a lens with extended depth of focus in both',
     person: person('D-0127', 'Fogbank, Thandiwe', ['1961-03-05', 'female']),
     right: {
       axialLengthMm: 23.78,
@@ -151,7 +151,7 @@ export const COURSE_CASES: readonly DemoCase[] = [
       whiteToWhiteMm: 11.98,
       daysAgo: 19,
     },
-    plan: { right: signed(15, 'Meridian Reach', 0), left: draft(2, 'Meridian Reach', -0.25) },
+    plan: { right: signed(15, 'Meridian Reach', 0), left: chosen(2, 'Meridian Reach', -0.25) },
   },
   {
     story: 'first eye signed, second eye not measured yet: its row stands in the file for trying the upload',

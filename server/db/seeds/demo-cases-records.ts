@@ -1,5 +1,5 @@
 /** What a record may lack or contradict: depths, answers, a fellow eye, values too alike. All people are invented. */
-import { person, signed, type DemoCase } from './demo-case';
+import { chosen, person, signed, type DemoCase } from './demo-case';
 
 export const RECORD_CASES: readonly DemoCase[] = [
   {
@@ -7,6 +7,7 @@ export const RECORD_CASES: readonly DemoCase[] = [
     person: person('D-0116', 'Pennymoor, Rosa', ['1949-12-01', 'female']),
     right: { axialLengthMm: 23.02, flatKD: 44.05, steepKD: 44.8, steepAxisDeg: 85 },
     left: { axialLengthMm: 23.1, flatKD: 43.98, steepKD: 44.71, steepAxisDeg: 97 },
+    plan: { right: chosen(6) },
   },
   {
     story: 'chamber depth from the back of the cornea, thickness known',

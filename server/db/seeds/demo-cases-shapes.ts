@@ -53,10 +53,10 @@ export const SHAPE_CASES: readonly DemoCase[] = [
     plan: { right: draft(6, 'Pilot Mono') },
   },
   {
-    story: 'very long eyes, low powers',
+    story: 'very long eyes, powers round zero and below',
     person: person('D-0103', 'Cinderholm, Yara', ['1961-06-23', 'female']),
     right: {
-      axialLengthMm: 31.22,
+      axialLengthMm: 33.12,
       flatKD: 42.1,
       steepKD: 43.25,
       steepAxisDeg: 97,
@@ -66,7 +66,7 @@ export const SHAPE_CASES: readonly DemoCase[] = [
       whiteToWhiteMm: 11.78,
     },
     left: {
-      axialLengthMm: 30.74,
+      axialLengthMm: 32.64,
       flatKD: 42.3,
       steepKD: 43.32,
       steepAxisDeg: 88,
@@ -75,6 +75,7 @@ export const SHAPE_CASES: readonly DemoCase[] = [
       cornealThicknessUm: 530,
       whiteToWhiteMm: 11.78,
     },
+    plan: { right: draft(4, 'Keel Low Power', -1) },
   },
   {
     story: 'steep corneas',
@@ -123,6 +124,7 @@ export const SHAPE_CASES: readonly DemoCase[] = [
       cornealThicknessUm: 568,
       whiteToWhiteMm: 11.61,
     },
+    plan: { right: draft(4) },
   },
   {
     story: 'flat corneas',

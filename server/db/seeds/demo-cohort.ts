@@ -4,7 +4,7 @@
  * depth 3.10 mm, lens thickness 4.52 mm), the two eyes of a person alike but never equal.
  */
 import { randomFromSeed, type RandomSource } from '@/formulas';
-import { draft, person, signed, type DemoCase } from './demo-case';
+import { chosen, draft, person, signed, type DemoCase } from './demo-case';
 import { CATARACT_CASES } from './demo-cases-cataracts';
 import { CORNEA_CASES } from './demo-cases-corneas';
 import { COURSE_CASES } from './demo-cases-course';
@@ -66,7 +66,8 @@ function planOf(index: number, daysAgo: number): DemoCase['plan'] {
   if (index === 1) return { right: signed(daysAgo - 3, 'Lantern Three Distances', 0) };
   if (index === 3) return { right: signed(daysAgo - 3), left: signed(daysAgo - 3) };
   if (index < 5) return { right: signed(daysAgo - 3) };
-  if (index < 7) return { right: draft(2) };
+  if (index === 5) return { right: chosen(2) };
+  if (index === 6) return { right: draft(2) };
   return undefined;
 }
 

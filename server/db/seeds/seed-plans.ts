@@ -28,13 +28,13 @@ async function settle(act: Act, record: string, { side, ruleId, because }: DemoS
 }
 
 export function planSteps(cases: readonly DemoCase[], today: string): SeedStep[] {
-  return cases.flatMap(({ person, plan }) =>
-    SIDES.flatMap((side) => {
+  return cases.flatMap(({ person, plan }, place) =>
+    SIDES.flatMap((side, sidePlace) => {
       const wanted = plan?.[side];
       if (!wanted) return [];
       return [
         {
-          at: clinicMoment(today, wanted.daysAgo, '17:30'),
+          at: clinicMoment(today, wanted.daysAgo, eveningTime(2 * place + sidePlace)),
           by: 'surgeon' as const,
           perform: (act: Act) => planEye(act, { record: person.record, side, wanted }),
         },
@@ -42,6 +42,9 @@ export function planSteps(cases: readonly DemoCase[], today: string): SeedStep[]
     }),
   );
 }
+
+/** Plans of one day are made one after the other. */
+const eveningTime = (place: number): string => `17:${10 + (place % 50)}`;
 
 interface EyeToPlan {
   record: string;
@@ -53,8 +56,9 @@ async function planEye(act: Act, { record, side, wanted }: EyeToPlan): Promise<v
   const { id: patientId } = await getPatientByRecord(act, record);
   const lensIds = await idsOfLenses(act, [...new Set([wanted.lensName, BACKUP_LENS])]);
   const draft = await startDraft(act, { patientId, side }, { lensIds, targetD: wanted.targetD });
-  if (!wanted.isSigned) return;
+  if (wanted.state === 'open') return;
   const chosen = await chooseClosest(act, draft);
+  if (wanted.state === 'chosen') return;
   const weighed = chosen.calculation.flags.filter(({ severity }) => severity === 'weigh');
   await signPlan(act, chosen.plan.id, {
     version: chosen.plan.version,

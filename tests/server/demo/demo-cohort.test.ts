@@ -134,20 +134,10 @@ describe('the cases that a practice meets', () => {
   it.each(['immersion', 'contact'] as const)(
     'has a swollen lens measured by %s, its fellow optically',
     (method) => {
-      const found = cohort.some((one) =>
-        SIDES.some((side) => {
-          const fellow = one[side === 'right' ? 'left' : 'right'];
-          const eye = one[side];
-          return (
-            eye?.method === method &&
-            (eye.lensThicknessMm ?? 0) > 5 &&
-            (eye.acdMm ?? 9) < 2.5 &&
-            fellow !== null &&
-            fellow.method === undefined &&
-            (fellow.lensThicknessMm ?? 9) < (eye.lensThicknessMm ?? 0) - 0.5
-          );
-        }),
-      );
+      const found = measured.some(({ one, side, eye }) => {
+        const fellow = one[side === 'right' ? 'left' : 'right'];
+        return eye.method === method && isSwollen(eye) && fellow !== null && isThinnerOptical(fellow, eye);
+      });
 
       expect(found).toBe(true);
     },
@@ -201,7 +191,7 @@ describe('the calendar', () => {
         for (const side of SIDES) {
           const plan = one.plan?.[side];
           if (!plan) continue;
-          const planned = clinicMoment(today, plan.daysAgo, '17:30');
+          const planned = clinicMoment(today, plan.daysAgo, '17:10');
           const first = clinicMoment(today, one[side]?.daysAgo ?? 12, '16:20');
           expect(first < planned).toBe(true);
           expect(planned < new Date(`${today}T00:00:00`).toISOString()).toBe(true);
@@ -223,4 +213,12 @@ it('writes radii that are the same cornea as the powers', () => {
 
 function isUnanswered(one: DemoCase, side: Side): boolean {
   return one.history?.[side]?.cornealSurgery === null && one[side] !== null;
+}
+
+function isSwollen({ lensThicknessMm = 0, acdMm = 9 }: DemoEye): boolean {
+  return lensThicknessMm > 5 && acdMm < 2.5;
+}
+
+function isThinnerOptical(fellow: DemoEye, { lensThicknessMm = 0 }: DemoEye): boolean {
+  return fellow.method === undefined && (fellow.lensThicknessMm ?? 9) < lensThicknessMm - 0.5;
 }
