@@ -45,4 +45,11 @@ export const ROUTES_BY_HAND: Record<string, Who> = {
   'GET /api/lenses/:id': ['surgeon', 'counsellor', 'nurse', 'administrator'],
   'PUT /api/lenses/:id': ['administrator'],
   'POST /api/lenses/import': ['administrator'],
+  'GET /api/plans': ['surgeon', 'counsellor', 'nurse'],
+  'GET /api/plans/:id': ['surgeon', 'counsellor', 'nurse'],
+  'GET /api/plans/:id/sheet.pdf': ['surgeon', 'counsellor', 'nurse'],
+  'POST /api/patients/:patientId/eyes/:side/plans': ['surgeon'],
+  'PUT /api/plans/:id': ['surgeon'],
+  'POST /api/plans/:id/discard': ['surgeon'],
+  'POST /api/plans/:id/sign': ['surgeon'],
 };
