@@ -1,5 +1,13 @@
 /** Where eyes stand on their way, with the flags that hold them up. For one eye or for a page of patients. */
-import { EYE_STAGE_WORDS, type Eye, type EyeStage, type Flag, type Measurement } from '@/shared/contract';
+import {
+  EYE_STAGE_WORDS,
+  type Eye,
+  type EyeStage,
+  type Flag,
+  type Lens,
+  type Measurement,
+  type Patient,
+} from '@/shared/contract';
 import { checkMeasurements } from '@/shared/clinical/measurement-checks';
 import type { Transaction } from '@/server/db/write-queue';
 import { listMeasurements, ofRecord } from '@/server/features/measurements/measurement.service';
@@ -31,13 +39,14 @@ export async function findStandings(
   transaction?: Transaction,
 ): Promise<EyeStanding[]> {
   const ids = eyes.map(({ id }) => id);
-  const [measurements, settlements, plans, lenses, patients] = await Promise.all([
+  const [measurements, settlements, plans] = await Promise.all([
     listMeasurements(eyes, transaction),
     listSettlements(ids, transaction),
     findPlanStates(ids, transaction),
-    listLenses(transaction),
-    listPatientsById([...new Set(eyes.map(({ patientId }) => patientId))], transaction),
   ]);
+  // Only a signature has to be compared with the catalogue and the patient.
+  const signedEyes = eyes.filter(({ id }) => plans.get(id)?.signed);
+  const [lenses, patients] = await catalogueAndPatients(signedEyes, transaction);
   return eyes.map((eye) => {
     const fellow = eyes.find(({ patientId, side }) => patientId === eye.patientId && side !== eye.side);
     const measurement = ofRecord(measurements.get(eye.id));
@@ -56,6 +65,15 @@ export async function findStandings(
       waitsFor: waitsFor(stage, flags),
     };
   });
+}
+
+async function catalogueAndPatients(
+  eyes: readonly Eye[],
+  transaction?: Transaction,
+): Promise<[Lens[], Patient[]]> {
+  if (eyes.length === 0) return [[], []];
+  const patientIds = [...new Set(eyes.map(({ patientId }) => patientId))];
+  return Promise.all([listLenses(transaction), listPatientsById(patientIds, transaction)]);
 }
 
 /** A settlement counts for the measurement that it was given for, and no other. */
