@@ -16,10 +16,11 @@ export default defineConfig({
   // One server and one database: journeys run one after the other and use patients of their own.
   workers: 1,
   fullyParallel: false,
-  timeout: 60_000,
+  timeout: 45_000,
   expect: { timeout: 10_000 },
   reporter: [['list'], ['json']],
   use: {
+    actionTimeout: 10_000,
     baseURL: `http://localhost:${PORT}`,
     locale: 'en-GB',
     timezoneId: 'UTC',

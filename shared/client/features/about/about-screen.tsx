@@ -29,7 +29,7 @@ const CAUTIONS = [
 export function AboutScreen() {
   const { choice, setChoice } = useTheme();
   return (
-    <Screen title="About and settings" width="reading" hasCautions={false}>
+    <Screen title="About and settings" back="/home" width="reading" hasCautions={false}>
       <Card title="Appearance">
         <RadioGroup
           label="Light"

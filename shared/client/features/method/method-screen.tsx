@@ -24,6 +24,7 @@ export function MethodScreen() {
   return (
     <Screen
       title="Methods"
+      back="/about"
       lead="Every formula and rule, where it comes from, and how far it has been checked"
       width="reading"
     >
