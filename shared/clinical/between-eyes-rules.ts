@@ -1,29 +1,24 @@
-/** Checks that compare the two eyes, and the pattern of a swollen lens. */
-import { usedEye } from './effective-eye';
-import { CHECK_LIMITS as LIMITS } from './check-thresholds';
+/** Checks that compare the two eyes. */
 import type { CheckFacts, CheckRule } from './check-facts';
-
-const KNOX_CARTWRIGHT = 'Knox Cartwright et al., Eye 2010;24:894-900';
+import { usedEye } from './effective-eye';
+import { KNOX_CARTWRIGHT } from './length-and-cornea-rules';
+import { isAbove, isAtLeast, passing } from './limits';
 
 export const BETWEEN_EYES_RULES: readonly CheckRule[] = [
   {
     id: 'between-eyes-axial-length',
-    source: `${KNOX_CARTWRIGHT} [M]; 0.30 mm and more occurs in 24 % of 1,379 patients, JCRS 2008 [V]`,
+    source: `${KNOX_CARTWRIGHT} [M]; 0.30 mm and more occurs in 24 % of 1,379 patients, JCRS 2008, PMID 18165085 [V]`,
     mark: 'M',
-    judge: ({ axialLengthMm, fellow }) => {
+    judge: ({ axialLengthMm, fellow, limits: { betweenEyesAxialLengthMm: limit } }) => {
       if (!fellow) return null;
       const differenceMm = Math.abs(axialLengthMm - fellow.axialLengthMm);
-      const { note, weigh } = LIMITS.betweenEyesAxialLengthMm;
-      // Lengths carry two decimals: 23.80 and 23.50 differ by 0.30, whatever binary fractions make of it.
-      const hundredths = Math.round(differenceMm * 100);
-      if (hundredths < Math.round(note * 100)) return null;
-      const isLarge = hundredths > Math.round(weigh * 100);
+      if (!isAtLeast(differenceMm, limit.note)) return null;
+      const isLarge = isAbove(differenceMm, limit.weigh);
+      const longerMm = Math.max(axialLengthMm, fellow.axialLengthMm);
       return {
         severity: isLarge ? 'weigh' : 'note',
-        message: `The axial lengths of the two eyes differ by ${differenceMm.toFixed(2)} mm`,
-        advice: isLarge
-          ? 'Repeat both, and look whether the old refractions explain it.'
-          : 'Common; look whether the old refractions explain it.',
+        message: `The axial lengths of the two eyes differ by ${passing(differenceMm, isLarge ? [limit.weigh] : [])} mm`,
+        advice: `${isLarge ? 'Repeat both, and look' : 'Look'} whether the old refractions explain it. ${howUsual(longerMm)}`,
       };
     },
   },
@@ -31,13 +26,13 @@ export const BETWEEN_EYES_RULES: readonly CheckRule[] = [
     id: 'between-eyes-keratometry',
     source: KNOX_CARTWRIGHT,
     mark: 'M',
-    judge: ({ meanKeratometryD, fellow }) => {
+    judge: ({ meanKeratometryD, fellow, limits: { betweenEyesKeratometryD: limitD } }) => {
       if (!fellow) return null;
       const differenceD = Math.abs(meanKeratometryD - usedEye(fellow).meanKeratometryD);
-      return differenceD > LIMITS.betweenEyesKeratometryD
+      return isAbove(differenceD, limitD)
         ? {
             severity: 'weigh',
-            message: `The mean keratometry of the two eyes differs by ${differenceD.toFixed(2)} D`,
+            message: `The mean keratometry of the two eyes differs by ${passing(differenceD, [limitD])} D`,
             advice: 'Repeat both; ask for contact lenses and earlier surgery.',
           }
         : null;
@@ -62,8 +57,8 @@ export const BETWEEN_EYES_RULES: readonly CheckRule[] = [
     source:
       'optical reads 0.18 mm longer than immersion, 0.47 mm than contact (Hitzenberger et al., 196 eyes) [V]',
     mark: 'V',
-    judge: ({ values, fellow }) =>
-      fellow && (values.method === 'optical') !== (fellow.method === 'optical')
+    judge: ({ isUltrasound, fellow }) =>
+      fellow && isUltrasound !== (fellow.method !== 'optical')
         ? {
             severity: 'note',
             message: 'One eye was measured optically, the other by ultrasound',
@@ -71,14 +66,20 @@ export const BETWEEN_EYES_RULES: readonly CheckRule[] = [
           }
         : null,
   },
-  {
-    id: 'swollen-lens',
-    source:
-      'lens above 5.0 mm, chamber below 2.5 mm, lens thicker than the fellow by 0.5 mm: common practice, from memory',
-    mark: 'CP',
-    judge: swollenLens,
-  },
 ];
+
+/** 95th centile of the difference, by the longer eye: Moorfields series, JCRS 2008, PMID 18165085 [V]. */
+const SHORT_PAIR = { upToMm: 22, centileMm: 0.5 };
+const LONG_PAIR = { fromMm: 28, centileMm: 4 };
+
+function howUsual(longerMm: number): string {
+  const nineteenOfTwenty = 'Nineteen of twenty patients whose longer eye is';
+  const short = `${SHORT_PAIR.upToMm} mm or shorter differ by less than ${SHORT_PAIR.centileMm.toFixed(1)} mm`;
+  const long = `${LONG_PAIR.fromMm} mm or longer by less than ${LONG_PAIR.centileMm.toFixed(1)} mm`;
+  if (longerMm <= SHORT_PAIR.upToMm) return `${nineteenOfTwenty} ${short}.`;
+  if (longerMm >= LONG_PAIR.fromMm) return `Usual in long eyes: those of ${long}, in nineteen of twenty.`;
+  return `${nineteenOfTwenty} ${short}, ${long}.`;
+}
 
 function isCopy({ values, fellow }: CheckFacts): boolean {
   return (
@@ -87,40 +88,4 @@ function isCopy({ values, fellow }: CheckFacts): boolean {
     values.flatRadiusMm === fellow.flatRadiusMm &&
     values.steepRadiusMm === fellow.steepRadiusMm
   );
-}
-
-/** Thick, and besides shallow or much thicker than its fellow; names what would decide it and is missing. */
-function swollenLens(facts: CheckFacts): ReturnType<CheckRule['judge']> {
-  const thicknessMm = facts.values.lensThicknessMm;
-  if (thicknessMm === null || thicknessMm <= LIMITS.lensThicknessMm.note) return null;
-  const signs = [...shallowSign(facts), ...thickerSign(facts, thicknessMm)];
-  if (signs.length === 0) return null;
-  const seen = [`lens ${thicknessMm.toFixed(2)} mm`, ...signs].join(', ');
-  return {
-    severity: 'weigh',
-    message: `Pattern of a swollen lens: ${seen}. Still to look at: ${missingSigns(facts).join(', ')}`,
-    advice:
-      'The capsule opening may run out and the lens position is less certain: plan backup lenses, promise nothing that needs a whole capsule.',
-  };
-}
-
-function shallowSign({ chamberDepthMm }: CheckFacts): string[] {
-  const isShallow = chamberDepthMm !== null && chamberDepthMm < LIMITS.shallowChamberMm;
-  return isShallow ? [`chamber ${chamberDepthMm.toFixed(2)} mm`] : [];
-}
-
-function thickerSign({ fellow }: CheckFacts, thicknessMm: number): string[] {
-  if (fellow?.lensThicknessMm == null) return [];
-  const overFellowMm = thicknessMm - fellow.lensThicknessMm;
-  return overFellowMm > LIMITS.lensThicknessOverFellowMm
-    ? [`${overFellowMm.toFixed(2)} mm thicker than the fellow lens`]
-    : [];
-}
-
-function missingSigns({ chamberDepthMm, fellow }: CheckFacts): string[] {
-  return [
-    ...(chamberDepthMm === null ? ['chamber depth'] : []),
-    ...(fellow?.lensThicknessMm == null ? ['thickness of the fellow lens'] : []),
-    'white reflex at the slit lamp',
-  ];
 }

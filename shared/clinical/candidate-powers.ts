@@ -12,8 +12,10 @@ export function availablePowers(ranges: readonly PowerRange[]): number[] {
   return [...new Set(powers)].sort((a, b) => a - b);
 }
 
-/** Rows above and below the exact power; the chart shows this many on either side. */
-const ROWS_EACH_SIDE = 4;
+/** Powers this near to the exact one are worth a row … */
+const REACH_D = 2.5;
+/** … on either side at least so many where steps are coarse, and at most so many where they are fine. */
+const ROWS_EACH_SIDE = { least: 4, most: 6 };
 
 export interface PowerWindow {
   /** From higher to lower power. */
@@ -32,13 +34,17 @@ export interface PowerQuestion {
 /** The powers round the exact one, from higher to lower; at an end of the range, the ones nearest to it. */
 export function powersAround({ exactPowerD, ranges, chosenPowerD }: PowerQuestion): PowerWindow {
   const powers = availablePowers(ranges);
-  const lowest = powers[0] ?? exactPowerD;
-  const highest = powers.at(-1) ?? exactPowerD;
-  const firstAbove = powers.findIndex((powerD) => powerD >= exactPowerD);
-  const centre = firstAbove < 0 ? powers.length : firstAbove;
-  const first = Math.max(centre - ROWS_EACH_SIDE, 0);
-  const last = centre + ROWS_EACH_SIDE;
-  const shown = powers.filter((powerD, index) => (index >= first && index < last) || powerD === chosenPowerD);
-  const beyond = exactPowerD > highest ? 'above' : exactPowerD < lowest ? 'below' : null;
-  return { powersD: shown.reverse(), beyond };
+  const above = powers.filter((powerD) => powerD > exactPowerD);
+  const below = powers.filter((powerD) => powerD <= exactPowerD).reverse();
+  const isNear = (powerD: number, index: number): boolean =>
+    index < ROWS_EACH_SIDE.least ||
+    (index < ROWS_EACH_SIDE.most && Math.abs(powerD - exactPowerD) <= REACH_D);
+  const near = new Set([...above.filter(isNear), ...below.filter(isNear)]);
+  const shown = powers.filter((powerD) => near.has(powerD) || powerD === chosenPowerD);
+  return { powersD: shown.reverse(), beyond: beyondRange(exactPowerD, powers) };
+}
+
+function beyondRange(exactPowerD: number, powers: readonly number[]): PowerWindow['beyond'] {
+  if (exactPowerD > (powers.at(-1) ?? exactPowerD)) return 'above';
+  return exactPowerD < (powers[0] ?? exactPowerD) ? 'below' : null;
 }

@@ -2,7 +2,7 @@
  * What the formulas receive from a measurement: radii as stored, chamber depth counted from the epithelium.
  */
 import { keratometricCylinderD, meanKeratometryD } from '@/formulas';
-import type { EyeGeometry } from '@/formulas';
+import type { EyeGeometry, FormulaId } from '@/formulas';
 import type { MeasurementValues, PlanCalculation } from '@/shared/contract';
 
 export type UsedEye = PlanCalculation['eye'];
@@ -41,12 +41,14 @@ export function usedEye(values: MeasurementValues): UsedEye {
   };
 }
 
-export function toGeometry(eye: UsedEye): EyeGeometry {
+/** What one formula asks: the chamber depth only where it is used, so that an odd depth silences no other formula. */
+export function geometryFor(formula: FormulaId, eye: UsedEye): EyeGeometry {
   const { axialLengthMm, flatRadiusMm, steepRadiusMm, anteriorChamberDepthMm } = eye;
+  const usesDepth = formula === 'haigis' && anteriorChamberDepthMm !== null;
   return {
     axialLengthMm,
     flatRadiusMm,
     steepRadiusMm,
-    ...(anteriorChamberDepthMm === null ? {} : { anteriorChamberDepthMm }),
+    ...(usesDepth ? { anteriorChamberDepthMm } : {}),
   };
 }

@@ -3,46 +3,46 @@
  */
 import type { CheckRule } from './check-facts';
 
-const CP = { mark: 'CP' } as const;
-
 export const HISTORY_RULES: readonly CheckRule[] = [
   {
     id: 'corneal-surgery-unanswered',
-    source: 'common practice; after laser surgery plain formulas leave a refractive surprise',
-    ...CP,
-    judge: ({ history }) => {
-      if (history.cornealSurgery === null) {
-        return {
-          severity: 'stop',
-          message: 'Nobody has answered whether this cornea had surgery',
-          advice: 'Ask the patient and record the answer; look at the topography when in doubt.',
-        };
-      }
-      if (history.cornealSurgery !== 'unknown') return null;
-      return {
-        severity: 'stop',
-        message: 'It is not known whether this cornea had surgery',
-        advice: 'Look at the topography and earlier records; settle this by name before signing.',
-      };
+    source: 'common practice; after laser surgery plain formulas leave a refractive surprise [M]',
+    mark: 'CP',
+    judge: ({ history: { cornealSurgery } }) => {
+      if (cornealSurgery === 'yes' || cornealSurgery === 'no') return null;
+      return cornealSurgery === null
+        ? {
+            severity: 'stop',
+            message: 'Nobody has answered whether this cornea had surgery',
+            advice: 'Ask the patient and record the answer; look at the topography when in doubt.',
+          }
+        : {
+            severity: 'stop',
+            message: 'It is not known whether this cornea had surgery',
+            advice: 'Look at the topography and earlier records; settle this by name before signing.',
+          };
     },
   },
   {
     id: 'corneal-surgery',
-    source: 'hyperopic surprise after myopic laser, myopic after hyperopic: from memory of the literature',
+    source:
+      'hyperopic surprise after myopic laser, myopic after hyperopic: from memory of the literature; no automatic recommendation from plain formulas: common practice',
     mark: 'M',
+    canBeSettled: false,
     judge: ({ history }) =>
       history.cornealSurgery === 'yes'
         ? {
-            severity: 'weigh',
+            severity: 'stop',
             message: 'This cornea had surgery: the plain formulas are silent',
-            advice: 'Use the methods published for such eyes; expect wider errors and tell the patient so.',
+            advice:
+              'Use the methods published for such eyes; expect wider errors and tell the patient so. No reason makes the plain formulas hold here.',
           }
         : null,
   },
   {
     id: 'lens-status-missing',
     source: 'common practice; the lens status decides velocity and constants',
-    ...CP,
+    mark: 'CP',
     judge: ({ history }) =>
       history.lensStatus === null
         ? {
@@ -53,9 +53,23 @@ export const HISTORY_RULES: readonly CheckRule[] = [
         : null,
   },
   {
+    id: 'lens-status-not-phakic',
+    source:
+      'common practice; the formulas predict where a lens settles that takes the place of the natural one',
+    mark: 'CP',
+    judge: ({ history: { lensStatus } }) =>
+      lensStatus !== null && lensStatus !== 'phakic'
+        ? {
+            severity: 'note',
+            message: `This eye is recorded as ${LENS_STATUS_WORDS[lensStatus]}: the plain formulas are silent`,
+            advice: 'Check side and record if a natural lens was expected here.',
+          }
+        : null,
+  },
+  {
     id: 'vitreous-status-missing',
     source: 'common practice; sound travels slower in silicone oil (about 980 to 1040 m/s, from memory)',
-    ...CP,
+    mark: 'CP',
     judge: ({ history, isUltrasound }) =>
       isUltrasound && (history.vitreousStatus === null || history.vitreousStatus === 'unknown')
         ? {
@@ -67,19 +81,37 @@ export const HISTORY_RULES: readonly CheckRule[] = [
   },
   {
     id: 'silicone-oil',
-    source:
-      'velocities in silicone oil, from memory; oil changes length by ultrasound and the optics of the eye',
+    source: 'velocities in silicone oil (about 980 to 1040 m/s against 1532), from memory',
     mark: 'M',
-    judge: ({ history, isUltrasound }) => {
-      if (history.vitreousStatus !== 'silicone-oil') return null;
+    canBeSettled: false,
+    judge: ({ history, isUltrasound }) =>
+      history.vitreousStatus === 'silicone-oil' && isUltrasound
+        ? {
+            severity: 'stop',
+            message: 'Silicone oil in an eye measured by ultrasound: the length is wrong',
+            advice:
+              'Measure optically; decide with the retinal surgeon whether the oil stays. The plain formulas are silent.',
+          }
+        : null,
+  },
+  {
+    id: 'vitreous-replaced',
+    source: 'oil and gas change the optics of the eye behind the lens, which plain formulas do not know [M]',
+    mark: 'M',
+    judge: ({ history: { vitreousStatus }, isUltrasound }) => {
+      const isOil = vitreousStatus === 'silicone-oil' && !isUltrasound;
+      if (!isOil && vitreousStatus !== 'gas') return null;
       return {
-        severity: isUltrasound ? 'stop' : 'weigh',
-        message: isUltrasound
-          ? 'Silicone oil in an eye measured by ultrasound: the length is wrong unless corrected'
-          : 'Silicone oil in the eye: plain formulas are silent',
-        advice:
-          'Measure optically, or correct the velocity; decide with the retinal surgeon whether the oil stays.',
+        severity: 'weigh',
+        message: `${isOil ? 'Silicone oil' : 'Gas'} in the eye: the plain formulas are silent`,
+        advice: 'Decide with the retinal surgeon when to measure and to operate.',
       };
     },
   },
 ];
+
+const LENS_STATUS_WORDS = {
+  pseudophakic: 'pseudophakic',
+  aphakic: 'aphakic',
+  'phakic-lens': 'carrying a lens in front of its natural one',
+} as const;

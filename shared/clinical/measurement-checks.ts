@@ -4,24 +4,28 @@
  */
 import type { Flag } from '@/shared/contract';
 import { BETWEEN_EYES_RULES } from './between-eyes-rules';
+import { CHAMBER_AND_LENS_RULES } from './chamber-and-lens-rules';
 import { checkFacts } from './check-facts';
 import type { CheckQuestion, CheckRule } from './check-facts';
 import { HISTORY_RULES } from './history-rules';
-import { MEASUREMENT_RULES } from './measurement-rules';
+import { LENGTH_AND_CORNEA_RULES } from './length-and-cornea-rules';
+import { RECORD_RULES } from './record-rules';
 
 export type { CheckQuestion };
 
 export const CHECK_RULES: readonly CheckRule[] = [
   ...HISTORY_RULES,
   ...BETWEEN_EYES_RULES,
-  ...MEASUREMENT_RULES,
+  ...LENGTH_AND_CORNEA_RULES,
+  ...CHAMBER_AND_LENS_RULES,
+  ...RECORD_RULES,
 ];
 
 /** Flags in the order of the rules; none is settled yet. */
 export function checkMeasurements(question: CheckQuestion): Flag[] {
   const facts = checkFacts(question);
-  return CHECK_RULES.flatMap(({ id, source, mark, judge }) => {
+  return CHECK_RULES.flatMap(({ id, source, mark, canBeSettled = true, judge }) => {
     const finding = judge(facts);
-    return finding ? [{ ruleId: id, source, mark, settlement: null, ...finding }] : [];
+    return finding ? [{ ruleId: id, source, mark, canBeSettled, settlement: null, ...finding }] : [];
   });
 }

@@ -195,6 +195,8 @@ export const flagSchema = z.object({
   advice: z.string(),
   source: z.string(),
   mark: z.enum(['V', 'V*', 'N', 'M', 'CP', 'D']),
+  /** False for a stop that no reason can make up for: what it rests on has to change. */
+  canBeSettled: z.boolean(),
   settlement: z.object({ by: z.string(), at: isoInstantSchema, reason: z.string() }).nullable(),
 });
 export type Flag = z.infer<typeof flagSchema>;

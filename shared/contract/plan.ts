@@ -156,6 +156,8 @@ export const planSnapshotSchema = z.object({
   choice: planChoiceSchema,
   chosenLensName: z.string(),
   chosenCandidate: candidateSchema,
+  /** Rule ids of the weigh flags that were read and accepted at signing. */
+  acknowledgedRuleIds: z.array(z.string()),
   signedBy: z.object({ id: idSchema, displayName: z.string() }),
   signedAt: isoInstantSchema,
 });

@@ -73,6 +73,8 @@ export async function settleFlag(
     throw new ProblemError('conflict', 'This flag does not stand for the eye as it is measured now');
   }
   if (flag.severity === 'note') throw new ProblemError('conflict', 'A note needs no settlement');
+  if (flag.severity === 'stop' && !flag.canBeSettled)
+    throw new ProblemError('conflict', 'No reason makes up for this stop: what it rests on has to change');
   if (flag.settlement) throw takenField('ruleId', `Settled already by ${flag.settlement.by}`);
   const { eye } = standing;
   const settled = { settledBy: act.actor.id, settledAt: act.at };

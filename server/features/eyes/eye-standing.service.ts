@@ -1,13 +1,5 @@
 /** Where eyes stand on their way, with the flags that hold them up. For one eye or for a page of patients. */
-import {
-  EYE_STAGE_WORDS,
-  type Eye,
-  type EyeStage,
-  type Flag,
-  type Lens,
-  type Measurement,
-  type Patient,
-} from '@/shared/contract';
+import { EYE_STAGE_WORDS, type Eye, type EyeStage, type Flag, type Measurement } from '@/shared/contract';
 import { checkMeasurements } from '@/shared/clinical/measurement-checks';
 import type { Transaction } from '@/server/db/write-queue';
 import { listMeasurements, ofRecord } from '@/server/features/measurements/measurement.service';
@@ -39,23 +31,26 @@ export async function findStandings(
   transaction?: Transaction,
 ): Promise<EyeStanding[]> {
   const ids = eyes.map(({ id }) => id);
-  const [measurements, settlements, plans] = await Promise.all([
+  const [measurements, settlements, plans, patients] = await Promise.all([
     listMeasurements(eyes, transaction),
     listSettlements(ids, transaction),
     findPlanStates(ids, transaction),
+    listPatientsById([...new Set(eyes.map(({ patientId }) => patientId))], transaction),
   ]);
-  // Only a signature has to be compared with the catalogue and the patient.
-  const signedEyes = eyes.filter(({ id }) => plans.get(id)?.signed);
-  const [lenses, patients] = await catalogueAndPatients(signedEyes, transaction);
+  // Only a signature has to be compared with the catalogue.
+  const isAnySigned = [...plans.values()].some(({ signed }) => signed);
+  const lenses = isAnySigned ? await listLenses(transaction) : [];
   return eyes.map((eye) => {
     const fellow = eyes.find(({ patientId, side }) => patientId === eye.patientId && side !== eye.side);
     const measurement = ofRecord(measurements.get(eye.id));
     const fellowMeasurement = ofRecord(fellow && measurements.get(fellow.id));
-    const raised = measurement ? checkMeasurements({ measurement, fellowMeasurement, eye, today }) : [];
+    const patient = patients.find(({ id }) => id === eye.patientId);
+    if (!patient) throw new Error('An eye without a patient');
+    const question = { fellowMeasurement, eye, fellowEye: fellow ?? null, patient, today };
+    const raised = measurement ? checkMeasurements({ measurement, ...question }) : [];
     const settled = settlements.filter(({ eyeId }) => eyeId === eye.id);
     const flags = raised.map((flag) => ({ ...flag, settlement: settlementOf(flag, measurement, settled) }));
-    const patient = patients.find(({ id }) => id === eye.patientId);
-    const present = patient && { patient, eye, measurements: measurements.get(eye.id) ?? [], lenses };
+    const present = { patient, eye, measurements: measurements.get(eye.id) ?? [], lenses };
     const stage = stageOf({ measurement, flags, plan: plans.get(eye.id), present });
     return {
       eye,
@@ -65,15 +60,6 @@ export async function findStandings(
       waitsFor: waitsFor(stage, flags),
     };
   });
-}
-
-async function catalogueAndPatients(
-  eyes: readonly Eye[],
-  transaction?: Transaction,
-): Promise<[Lens[], Patient[]]> {
-  if (eyes.length === 0) return [[], []];
-  const patientIds = [...new Set(eyes.map(({ patientId }) => patientId))];
-  return Promise.all([listLenses(transaction), listPatientsById(patientIds, transaction)]);
 }
 
 /** A settlement counts for the measurement that it was given for, and no other. */
@@ -94,11 +80,11 @@ interface StageFacts {
   measurement: Measurement | null;
   flags: readonly Flag[];
   plan: PlanState | undefined;
-  present: PresentFacts | undefined;
+  present: PresentFacts;
 }
 
 function stageOf({ measurement, flags, plan, present }: StageFacts): EyeStage {
-  if (plan?.signed && present) {
+  if (plan?.signed) {
     return outOfDateReasons(readFrozen(plan.signed), present).length === 0 ? 'signed' : 'out-of-date';
   }
   if (!measurement) return 'measure';

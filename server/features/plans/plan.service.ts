@@ -109,7 +109,7 @@ export async function signPlan(
   const { stored, facts, desk } = await findDraft(act, id);
   requireVersion(signature.version, stored.version, desk);
   checkSignature(desk, signature);
-  const frozen = freeze(await snapshotOf(act, desk));
+  const frozen = freeze(await snapshotOf(act, desk, signature.acknowledgedRuleIds));
   await storeSignature(
     id,
     { signedBy: act.actor.id, at: act.at, snapshot: frozen.text, digest: frozen.digest },
@@ -197,7 +197,11 @@ function checkSignature(
   }
 }
 
-async function snapshotOf(act: Act, { plan, patient, eye, measurement, lenses, calculation }: PlanDesk) {
+async function snapshotOf(
+  act: Act,
+  { plan, patient, eye, measurement, lenses, calculation }: PlanDesk,
+  acknowledgedRuleIds: readonly string[],
+) {
   const { choice, input } = plan;
   const model = calculation.models.find(({ lensId }) => lensId === choice?.lensId);
   const chosenCandidate = model?.candidates.find(({ powerD }) => powerD === choice?.powerD);
@@ -217,6 +221,9 @@ async function snapshotOf(act: Act, { plan, patient, eye, measurement, lenses, c
     choice,
     chosenLensName: model.lensName,
     chosenCandidate,
+    acknowledgedRuleIds: calculation.flags
+      .filter(({ severity, ruleId }) => severity === 'weigh' && acknowledgedRuleIds.includes(ruleId))
+      .map(({ ruleId }) => ruleId),
     signedBy: { id: act.actor.id, displayName: act.actor.displayName },
     signedAt: act.at,
   };

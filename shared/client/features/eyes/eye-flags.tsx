@@ -15,7 +15,7 @@ export function EyeFlags({ desk }: { desk: EyeDesk }) {
   const [settling, setSettling] = useState<Flag>();
   const canSettle = hasPermission(roles, 'flag.settle');
   const actionFor = (flag: Flag) =>
-    canSettle && flag.severity === 'stop' && !flag.settlement ? (
+    canSettle && flag.severity === 'stop' && flag.canBeSettled && !flag.settlement ? (
       <Button label="Settle this stop" onPress={() => setSettling(flag)} />
     ) : null;
   return (
