@@ -29,7 +29,7 @@ test('imports a file, plans an eye, signs, prints and reads it', async ({ page }
     const chooser = page.waitForEvent('filechooser');
     await page.getByRole('button', { name: 'Choose a file' }).click();
     await (await chooser).setFiles(path);
-    await expect(page.getByText(/axial_length_mm "2350"/)).toBeVisible();
+    await expect(page.getByText(/axial_length_mm "2358"/)).toBeVisible();
     const store = page.getByRole('button', { name: /^Store/ });
     await expect(store).toBeVisible();
     // The second project finds everything stored already: importing twice changes nothing.

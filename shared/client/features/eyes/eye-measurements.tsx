@@ -1,4 +1,5 @@
 /** The measurement of record with its values, and the earlier ones. */
+import { View } from 'react-native';
 import { METHOD_NAMES } from '@/shared/contract';
 import type { EyeDesk, Measurement } from '@/shared/contract';
 import { Card } from '@/shared/client/components/card';
@@ -32,15 +33,20 @@ export function EyeMeasurements({ desk }: { desk: EyeDesk }) {
       </Card>
       {others.length > 0 ? (
         <Card title="Earlier measurements">
-          {others.map((measurement, index) => (
-            <RowLink
-              key={measurement.id}
-              href={{ pathname: '/measurements/[measurementId]', params: { measurementId: measurement.id } }}
-              title={`${formatDate(measurement.values.measuredAt)}, ${METHOD_NAMES[measurement.values.method]}`}
-              detail={supersededWords(measurement)}
-              hasRule={index > 0}
-            />
-          ))}
+          <View role="list">
+            {others.map((measurement, index) => (
+              <RowLink
+                key={measurement.id}
+                href={{
+                  pathname: '/measurements/[measurementId]',
+                  params: { measurementId: measurement.id },
+                }}
+                title={`${formatDate(measurement.values.measuredAt)}, ${METHOD_NAMES[measurement.values.method]}`}
+                detail={supersededWords(measurement)}
+                hasRule={index > 0}
+              />
+            ))}
+          </View>
         </Card>
       ) : null}
     </>
