@@ -47,7 +47,9 @@ test('imports a file, plans an eye, signs, prints and reads it', async ({ page }
     await page.getByRole('radio', { name: 'Natural lens', exact: true }).click();
     await page.getByRole('radio', { name: 'Vitreous', exact: true }).click();
     await page.getByRole('button', { name: 'Save the history' }).click();
-    await expect(page.getByText('Waits for a plan')).toBeVisible();
+    await expect(page.getByRole('region', { name: 'Where this eye stands' })).toContainText(
+      'Waits for a plan',
+    );
     await signOut(page);
   });
 

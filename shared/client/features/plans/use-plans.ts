@@ -50,8 +50,7 @@ export function useSignPlan(desk: PlanDesk) {
     mutationFn: (signature: Signature) =>
       call(paths.planSign(desk.plan.id), planDeskSchema, {
         method: 'POST',
-        body: signature,
-        version: desk.plan.version,
+        body: { ...signature, version: desk.plan.version },
       }),
     onSuccess: keepDesk,
   });
