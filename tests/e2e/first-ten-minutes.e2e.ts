@@ -84,7 +84,7 @@ test('imports a file, plans an eye, signs, prints and reads it', async ({ page }
     await signIn(page, 'counsellor', `/plans?search=${record}`);
     await expect(page.getByText(/Monofocal lens .*power \+\d/)).toBeVisible();
     await page.getByRole('link', { name: /,/ }).first().click();
-    await expect(page.getByText('RIGHT EYE').first()).toBeVisible();
+    await expect(page.getByRole('region', { name: 'Signed choice' })).toContainText('RIGHT EYE');
     await expect(page.getByRole('button', { name: 'Plan this eye again' })).toHaveCount(0);
   });
 });
