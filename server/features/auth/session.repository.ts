@@ -1,6 +1,6 @@
 import { Op, type Transaction } from 'sequelize';
-import { AccountModel } from '@/server/db/models/account';
 import { RefreshSessionModel } from '@/server/db/models/refresh-session';
+import { selectRows } from '@/server/db/select-rows';
 import type { Role } from '@/shared/contract';
 
 /** One refresh token, as the services see it. */
@@ -27,16 +27,27 @@ export async function findLiveSession(
   familyId: string,
   now: string,
 ): Promise<LiveSession | undefined> {
-  const [account, newest] = await Promise.all([
-    AccountModel.findOne({ where: { id: accountId, status: 'active' } }),
-    RefreshSessionModel.findOne({
-      where: { familyId, accountId, revokedAt: null, expiresAt: { [Op.gt]: now } },
-      order: [['lastUsedAt', 'DESC']],
-    }),
-  ]);
-  if (!account || !newest) return undefined;
-  const { id, displayName, roles } = account;
-  return { account: { id, displayName, roles }, lastUsedAt: newest.lastUsedAt };
+  const sql = `SELECT a.id, a.display_name AS displayName, a.roles, s.last_used_at AS lastUsedAt
+     FROM refresh_sessions s JOIN accounts a ON a.id = s.account_id
+     WHERE s.family_id = $1 AND s.account_id = $2 AND s.revoked_at IS NULL AND s.expires_at > $3
+       AND a.status = 'active'
+     ORDER BY s.last_used_at DESC LIMIT 1`;
+  const [row] = await selectRows<SessionRow>(RefreshSessionModel, {
+    sql,
+    bind: [familyId, accountId, now],
+    transaction: undefined,
+  });
+  if (!row) return undefined;
+  const { id, displayName, roles, lastUsedAt } = row;
+  return { account: { id, displayName, roles: JSON.parse(roles) as Role[] }, lastUsedAt };
+}
+
+interface SessionRow {
+  id: string;
+  displayName: string;
+  /** JSON. */
+  roles: string;
+  lastUsedAt: string;
 }
 
 export async function touchFamily(familyId: string, at: string, transaction: Transaction): Promise<void> {

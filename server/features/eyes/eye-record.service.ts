@@ -10,13 +10,15 @@ import {
   changeHistory,
   findEyeById,
   findEyes,
+  findPairOf,
   listEyeKeys,
   listEyesOfPatients,
+  listPairsOf,
   type EyeKey,
 } from './eye-record.repository';
 
 export type { EyeKey };
-export { findEyeById, listEyeKeys, listEyesOfPatients };
+export { findEyeById, findPairOf, listEyeKeys, listEyesOfPatients, listPairsOf };
 
 /** A right and a left eye for each of the new patients. */
 export async function createEyes(act: AnyAct, patientIds: readonly string[]): Promise<EyeKey[]> {

@@ -1,7 +1,6 @@
 import type { Transaction } from 'sequelize';
-import { AccountModel } from '@/server/db/models/account';
-import { EyeModel } from '@/server/db/models/eye';
 import { FlagSettlementModel } from '@/server/db/models/flag-settlement';
+import { asList, IN_FIRST, selectRows } from '@/server/db/select-rows';
 
 /** A flag settled by a named person with a reason. */
 export interface Settlement {
@@ -33,30 +32,10 @@ export async function listSettlements(
   eyeIds: readonly string[],
   transaction?: Transaction,
 ): Promise<Settlement[]> {
-  const rows = await FlagSettlementModel.findAll({
-    where: { eyeId: [...eyeIds] },
-    order: [['settledAt', 'DESC']],
-    transaction,
-  });
-  const eyes = await EyeModel.findAll({
-    attributes: ['id', 'updatedAt'],
-    where: { id: [...eyeIds] },
-    transaction,
-  });
-  const changedAt = new Map(eyes.map(({ id, updatedAt }) => [id, updatedAt]));
-  const people = await AccountModel.findAll({
-    attributes: ['id', 'displayName'],
-    where: { id: [...new Set(rows.map(({ settledBy }) => settledBy))] },
-    transaction,
-  });
-  const names = new Map(people.map(({ id, displayName }) => [id, displayName]));
-  const standing = rows.filter(({ eyeId, settledAt }) => settledAt >= (changedAt.get(eyeId) ?? ''));
-  return standing.map(({ eyeId, measurementId, ruleId, settledBy, settledAt, reason }) => ({
-    eyeId,
-    measurementId,
-    ruleId,
-    by: names.get(settledBy) ?? '',
-    at: settledAt,
-    reason,
-  }));
+  const sql = `SELECT s.eye_id AS eyeId, s.measurement_id AS measurementId, s.rule_id AS ruleId,
+       a.display_name AS "by", s.settled_at AS at, s.reason
+     FROM flag_settlements s JOIN eyes e ON e.id = s.eye_id JOIN accounts a ON a.id = s.settled_by
+     WHERE s.eye_id ${IN_FIRST} AND s.settled_at >= e.updated_at
+     ORDER BY s.settled_at DESC, s.id`;
+  return selectRows<Settlement>(FlagSettlementModel, { sql, bind: [asList(eyeIds)], transaction });
 }

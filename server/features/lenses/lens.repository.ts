@@ -9,20 +9,63 @@ import {
 import { AccountModel } from '@/server/db/models/account';
 import { LensModel } from '@/server/db/models/lens';
 import { LensConstantModel } from '@/server/db/models/lens-constant';
+import { columnList, selectRows } from '@/server/db/select-rows';
 
 export type LensFacts = Omit<LensInput, 'constants'>;
 
 /** Every model with the constants in use, by name. */
 export async function listAllLenses(transaction?: Transaction): Promise<Lens[]> {
-  const rows = await LensModel.findAll({ order: ['name', 'id'], transaction });
-  const constants = await LensConstantModel.findAll({ where: { replacedAt: null }, transaction });
-  return rows.map((row) =>
-    toLens(
-      row,
-      constants.filter(({ lensId }) => lensId === row.id),
-    ),
-  );
+  const [rows, constants] = await Promise.all([
+    selectRows<StoredLens>(LensModel, {
+      sql: `SELECT ${columnList(LensModel, LENS_ATTRIBUTES)} FROM lenses ORDER BY name, id`,
+      bind: [],
+      transaction,
+    }),
+    selectRows<StoredConstant>(LensConstantModel, {
+      sql: `SELECT ${columnList(LensConstantModel, CONSTANT_ATTRIBUTES)} FROM lens_constants WHERE replaced_at IS NULL`,
+      bind: [],
+      transaction,
+    }),
+  ]);
+  const byLens = new Map<string, StoredConstant[]>(rows.map(({ id }) => [id, []]));
+  for (const constant of constants) byLens.get(constant.lensId)?.push(constant);
+  return rows.map((row) => toLens(readLens(row), (byLens.get(row.id) ?? []).map(readConstant)));
 }
+
+const LENS_ATTRIBUTES = [
+  'id',
+  'name',
+  'kind',
+  'isToric',
+  'design',
+  'powerRanges',
+  'cylinderStepsD',
+  'remarks',
+  'isRetired',
+  'isDemo',
+  'version',
+] as const;
+const CONSTANT_ATTRIBUTES = ['lensId', 'formula', 'origin', 'values', 'source', 'dated'] as const;
+type LensFields = Pick<LensModel, (typeof LENS_ATTRIBUTES)[number]>;
+type ConstantFields = Pick<LensConstantModel, (typeof CONSTANT_ATTRIBUTES)[number]>;
+/** As the columns hold them. */
+type StoredLens = Omit<LensFields, 'isToric' | 'isRetired' | 'isDemo' | 'powerRanges' | 'cylinderStepsD'> &
+  Record<'isToric' | 'isRetired' | 'isDemo', 0 | 1> &
+  Record<'powerRanges' | 'cylinderStepsD', string>;
+type StoredConstant = Omit<ConstantFields, 'values'> & { values: string };
+
+const readLens = (row: StoredLens): LensFields => ({
+  ...row,
+  isToric: row.isToric === 1,
+  isRetired: row.isRetired === 1,
+  isDemo: row.isDemo === 1,
+  powerRanges: JSON.parse(row.powerRanges) as LensFields['powerRanges'],
+  cylinderStepsD: JSON.parse(row.cylinderStepsD) as LensFields['cylinderStepsD'],
+});
+const readConstant = (row: StoredConstant): ConstantFields => ({
+  ...row,
+  values: JSON.parse(row.values) as ConstantFields['values'],
+});
 
 export async function findLens(id: string, transaction?: Transaction): Promise<Lens | undefined> {
   const row = await LensModel.findByPk(id, { transaction });
@@ -95,7 +138,7 @@ export async function listConstantHistory(
   }));
 }
 
-function toLens(row: LensModel, constants: readonly LensConstantModel[]): Lens {
+function toLens(row: LensFields, constants: readonly ConstantFields[]): Lens {
   const {
     id,
     name,
@@ -125,7 +168,7 @@ function toLens(row: LensModel, constants: readonly LensConstantModel[]): Lens {
   };
 }
 
-function toConstant({ formula, origin, values, source, dated }: LensConstantModel): LensConstant {
+function toConstant({ formula, origin, values, source, dated }: ConstantFields): LensConstant {
   return { formula, origin, values, source, dated };
 }
 

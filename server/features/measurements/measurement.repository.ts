@@ -1,9 +1,8 @@
-import { QueryTypes, type Transaction } from 'sequelize';
+import type { Transaction } from 'sequelize';
 import type { Measurement, MeasurementValues, Provenance, Side } from '@/shared/contract';
 import { insertRows } from '@/server/db/insert-rows';
-import { AccountModel } from '@/server/db/models/account';
-import { ImportModel } from '@/server/db/models/import';
 import { MeasurementModel } from '@/server/db/models/measurement';
+import { asList, columnList, IN_FIRST, selectRows } from '@/server/db/select-rows';
 
 export interface NewMeasurement {
   id: string;
@@ -91,8 +90,8 @@ export async function findStored(
   id: string,
   transaction?: Transaction,
 ): Promise<StoredMeasurement | undefined> {
-  const row = await MeasurementModel.findByPk(id, { transaction });
-  return row ? (await toStored([row], transaction))[0] : undefined;
+  const [row] = await selectMeasurements('m.id = $1', id, transaction);
+  return row && toStored(row);
 }
 
 /** Newest first: by the day of the measurement, then by when it came in. */
@@ -100,24 +99,14 @@ export async function listStoredOfEyes(
   eyeIds: readonly string[],
   transaction?: Transaction,
 ): Promise<StoredMeasurement[]> {
-  const rows = await MeasurementModel.findAll({
-    where: { eyeId: [...eyeIds] },
-    order: [
-      ['measuredAt', 'DESC'],
-      ['createdAt', 'DESC'],
-      ['importRow', 'DESC'],
-      ['id', 'DESC'],
-    ],
-    transaction,
-  });
-  return toStored(rows, transaction);
+  return (await selectMeasurements(`m.eye_id ${IN_FIRST}`, asList(eyeIds), transaction)).map(toStored);
 }
 
 export async function listKeysOfEyes(
   eyeIds: readonly string[],
   transaction?: Transaction,
 ): Promise<MeasurementKey[]> {
-  return listKeys('m.eye_id IN (SELECT value FROM json_each($1))', JSON.stringify(eyeIds), transaction);
+  return listKeys(`m.eye_id ${IN_FIRST}`, asList(eyeIds), transaction);
 }
 
 export async function listKeysOfImport(
@@ -132,13 +121,10 @@ async function listKeys(
   value: string,
   transaction: Transaction | undefined,
 ): Promise<MeasurementKey[]> {
-  const rows = await MeasurementModel.sequelize?.query(
-    `SELECT m.id, e.patient_id AS patientId, e.side, m.content_hash AS contentHash,
+  const sql = `SELECT m.id, e.patient_id AS patientId, e.side, m.content_hash AS contentHash,
        m.created_at AS createdAt, m.import_row AS importRow
-     FROM measurements m JOIN eyes e ON e.id = m.eye_id WHERE ${condition}`,
-    { bind: [value], transaction, type: QueryTypes.SELECT },
-  );
-  return rows as MeasurementKey[];
+     FROM measurements m JOIN eyes e ON e.id = m.eye_id WHERE ${condition}`;
+  return selectRows<MeasurementKey>(MeasurementModel, { sql, bind: [value], transaction });
 }
 
 export async function markSuperseded(
@@ -152,64 +138,59 @@ export async function markSuperseded(
   );
 }
 
-async function toStored(
-  rows: readonly MeasurementModel[],
+const STORED_ATTRIBUTES = [
+  'id',
+  'eyeId',
+  'importId',
+  'importRow',
+  'raw',
+  'createdAt',
+  'supersededById',
+  'supersededReason',
+  ...VALUE_ATTRIBUTES,
+] as const;
+
+/** As the columns hold it, with the name of its author and of its file. */
+type MeasurementRow = Omit<Pick<MeasurementModel, (typeof STORED_ATTRIBUTES)[number]>, 'raw'> & {
+  raw: string | null;
+  author: string;
+  fileName: string | null;
+};
+
+function selectMeasurements(
+  condition: string,
+  value: string,
   transaction: Transaction | undefined,
-): Promise<StoredMeasurement[]> {
-  const [authors, files] = await Promise.all([
-    namesOf(
-      rows.map((row) => row.createdBy),
-      transaction,
-    ),
-    fileNamesOf(
-      rows.flatMap((row) => row.importId ?? []),
-      transaction,
-    ),
-  ]);
-  return rows.map((row) => {
-    const createdBy = authors.get(row.createdBy) ?? '';
-    return {
-      id: row.id,
-      eyeId: row.eyeId,
-      values: valuesOf(row),
-      provenance: provenanceOf(row, files, createdBy),
-      createdAt: row.createdAt,
-      createdBy,
-      supersededById: row.supersededById,
-      supersededReason: row.supersededReason,
-    };
-  });
+): Promise<MeasurementRow[]> {
+  const sql = `SELECT ${columnList(MeasurementModel, STORED_ATTRIBUTES, 'm')}, a.display_name AS author,
+       i.file_name AS fileName
+     FROM measurements m JOIN accounts a ON a.id = m.created_by LEFT JOIN imports i ON i.id = m.import_id
+     WHERE ${condition}
+     ORDER BY m.measured_at DESC, m.created_at DESC, m.import_row DESC, m.id DESC`;
+  return selectRows<MeasurementRow>(MeasurementModel, { sql, bind: [value], transaction });
 }
 
-function valuesOf(row: MeasurementModel): MeasurementValues {
+function toStored(row: MeasurementRow): StoredMeasurement {
+  return {
+    id: row.id,
+    eyeId: row.eyeId,
+    values: valuesOf(row),
+    provenance: provenanceOf(row),
+    createdAt: row.createdAt,
+    createdBy: row.author,
+    supersededById: row.supersededById,
+    supersededReason: row.supersededReason,
+  };
+}
+
+function valuesOf(row: MeasurementRow): MeasurementValues {
   return Object.fromEntries(
     VALUE_ATTRIBUTES.map((attribute) => [attribute, row[attribute]]),
   ) as MeasurementValues;
 }
 
-function provenanceOf(
-  { importId, importRow, raw }: MeasurementModel,
-  files: ReadonlyMap<string, string>,
-  enteredBy: string,
-): Provenance {
-  if (importId === null || importRow === null) return { kind: 'manual', enteredBy };
-  return { kind: 'file', importId, fileName: files.get(importId) ?? '', row: importRow, raw: raw ?? {} };
-}
-
-async function namesOf(ids: string[], transaction?: Transaction): Promise<Map<string, string>> {
-  const rows = await AccountModel.findAll({
-    attributes: ['id', 'displayName'],
-    where: { id: [...new Set(ids)] },
-    transaction,
-  });
-  return new Map(rows.map(({ id, displayName }) => [id, displayName]));
-}
-
-async function fileNamesOf(ids: string[], transaction?: Transaction): Promise<Map<string, string>> {
-  const rows = await ImportModel.findAll({
-    attributes: ['id', 'fileName'],
-    where: { id: [...new Set(ids)] },
-    transaction,
-  });
-  return new Map(rows.map(({ id, fileName }) => [id, fileName]));
+function provenanceOf({ importId, importRow, raw, author, fileName }: MeasurementRow): Provenance {
+  if (importId === null || importRow === null) return { kind: 'manual', enteredBy: author };
+  const record = raw === null ? {} : (JSON.parse(raw) as Record<string, string>);
+  return { kind: 'file', importId, fileName: fileName ?? '', row: importRow, raw: record };
 }
