@@ -63,27 +63,34 @@ async function withWords(plans: readonly StoredPlan[], at: string): Promise<Plan
   });
 }
 
+/** A signed plan is told from what was frozen, a draft from what is known now. */
+function toldFrom(plan: StoredPlan, facts: EyeFacts) {
+  if (plan.snapshot === null) return { patient: facts.patient, lenses: facts.lenses, chance: null };
+  const { patient, lenses, chosenCandidate } = readFrozen(plan);
+  return { patient, lenses, chance: chosenCandidate.landing.chance };
+}
+
 function toItem(plan: StoredPlan, facts: EyeFacts): PlanListItem {
-  const frozen = plan.snapshot === null ? null : readFrozen(plan);
-  const patient = frozen?.patient ?? facts.patient;
-  const lens = (frozen?.lenses ?? facts.lenses).find(({ id }) => id === plan.choice?.lensId);
+  const { patient, lenses, chance } = toldFrom(plan, facts);
+  const { id, sequence, status, choice, input, signedBy, signedAt } = plan;
+  const lens = lenses.find((candidate) => candidate.id === choice?.lensId);
   return {
-    id: plan.id,
+    id,
     patientId: facts.patient.id,
     patientName: formatPatientName(patient),
     recordNumber: patient.recordNumber,
     birthDate: patient.birthDate,
     side: facts.eye.side,
-    sequence: plan.sequence,
-    status: plan.status,
+    sequence,
+    status,
     lensName: lens?.name ?? null,
-    powerD: plan.choice?.powerD ?? null,
-    targetD: plan.input.targetD,
-    chance: frozen?.chosenCandidate.landing.chance ?? null,
-    toleranceD: plan.input.toleranceD,
-    plainWords: plainWords({ choice: plan.choice, lens, targetD: plan.input.targetD }),
-    signedBy: plan.signedBy,
-    signedAt: plan.signedAt,
+    powerD: choice?.powerD ?? null,
+    targetD: input.targetD,
+    chance,
+    toleranceD: input.toleranceD,
+    plainWords: plainWords({ choice, lens, targetD: input.targetD }),
+    signedBy,
+    signedAt,
     outOfDateReasons: reasonsOf(plan, facts),
   };
 }
