@@ -26,6 +26,8 @@ export interface Database {
   sequelize: Sequelize;
   /** Runs one write transaction at a time; every query inside must carry the transaction. */
   inWrite: WriteQueue['inWrite'];
+  /** Runs a write of one statement in the same queue. */
+  inTurn: WriteQueue['inTurn'];
   /** Resolves when no write waits or runs. */
   idle: WriteQueue['idle'];
   close(): Promise<void>;
@@ -42,6 +44,7 @@ export function createDatabase({ storagePath }: { storagePath: string }): Databa
   return {
     sequelize,
     inWrite: queue.inWrite,
+    inTurn: queue.inTurn,
     idle: queue.idle,
     close: async () => {
       await queue.idle();

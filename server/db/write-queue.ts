@@ -9,17 +9,21 @@ export type { Transaction };
 
 export interface WriteQueue {
   inWrite<T>(write: (transaction: Transaction) => Promise<T>): Promise<T>;
+  /** A write of one statement is a transaction by itself: it waits its turn and needs no connection of its own. */
+  inTurn<T>(writeOnce: () => Promise<T>): Promise<T>;
   idle(): Promise<void>;
 }
 
 export function createWriteQueue(sequelize: Sequelize): WriteQueue {
   let last: Promise<unknown> = Promise.resolve();
+  const inTurn = <T>(writeOnce: () => Promise<T>): Promise<T> => {
+    const result = last.then(writeOnce);
+    last = result.catch(() => undefined);
+    return result;
+  };
   return {
-    inWrite<T>(write: (transaction: Transaction) => Promise<T>): Promise<T> {
-      const result = last.then(() => sequelize.transaction(write));
-      last = result.catch(() => undefined);
-      return result;
-    },
+    inTurn,
+    inWrite: (write) => inTurn(() => sequelize.transaction(write)),
     async idle() {
       let seen: unknown;
       while (seen !== last) {

@@ -1,4 +1,5 @@
 /** The short-lived token that proves a sign-in to the API. It carries ids only: roles are read on each request. */
+import { createSecretKey } from 'node:crypto';
 import { sign } from 'jsonwebtoken';
 import { ExtractJwt, Strategy, type VerifiedCallback } from 'passport-jwt';
 import { z } from 'zod';
@@ -28,13 +29,19 @@ export function signAccessToken({ secret, clock }: TokenKey, { accountId, family
   return sign(payload, secret, { algorithm: ALGORITHM, issuer: ISSUER, audience: AUDIENCE });
 }
 
+/**
+ * Made once: given text, the library first tries on every request whether it is a public key, which takes longer than
+ * all the rest of the check. The types of the strategy do not know that a key may be one already.
+ */
+const keyOf = (secret: string): Buffer => createSecretKey(secret, 'utf8') as unknown as Buffer;
+
 export function accessTokenStrategy(
   { secret, clock }: TokenKey,
   findActor: (subject: TokenSubject) => Promise<Express.User | undefined>,
 ): Strategy {
   const options = {
     jwtFromRequest: ExtractJwt.fromAuthHeaderAsBearerToken(),
-    secretOrKey: secret,
+    secretOrKey: keyOf(secret),
     algorithms: [ALGORITHM] as ['HS256'],
     issuer: ISSUER,
     audience: AUDIENCE,

@@ -13,3 +13,6 @@ export function chancePercent(chance: number): string {
   if (chance > 0 && chance < 0.01) return '<1';
   return String(Math.round(chance * 100));
 }
+
+/** Lens power with the decimals of its step, and at least one. */
+export const powerWords = (powerD: number): string => signedD(powerD, Number.isInteger(powerD * 2) ? 1 : 2);

@@ -197,12 +197,16 @@ export const planDeskSchema = z.object({
   calculation: planCalculationSchema,
   /** What stands between this draft and a signature, in words. Empty when it can be signed. */
   blockers: z.array(z.string()),
+  /** Of everything shown here that a signature would freeze; signing sends it back. */
+  shownDigest: z.string(),
 });
 export type PlanDesk = z.infer<typeof planDeskSchema>;
 
 export const signPlanSchema = z.object({
   /** The version that was on the screen: nobody signs what somebody else changed meanwhile. */
   version: versionSchema,
+  /** `shownDigest` of the desk that was on the screen: constants or flags may have changed without the draft. */
+  shownDigest: z.string().max(64),
   password: z.string().min(1, 'Type your password').max(200),
   /** The second, deliberate act: the side in words, typed or chosen anew. */
   confirmedSide: sideSchema,

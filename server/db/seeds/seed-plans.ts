@@ -62,6 +62,7 @@ async function planEye(act: Act, { record, side, wanted }: EyeToPlan): Promise<v
   const weighed = chosen.calculation.flags.filter(({ severity }) => severity === 'weigh');
   await signPlan(act, chosen.plan.id, {
     version: chosen.plan.version,
+    shownDigest: chosen.shownDigest,
     confirmedSide: side,
     acknowledgedRuleIds: weighed.map(({ ruleId }) => ruleId),
   });

@@ -1,14 +1,11 @@
 /** Where eyes stand on their way, with the flags that hold them up. For one eye or for a page of patients. */
 import { EYE_STAGE_WORDS, type Eye, type EyeStage, type Flag, type Measurement } from '@/shared/contract';
-import { checkMeasurements } from '@/shared/clinical/measurement-checks';
 import type { Transaction } from '@/server/db/write-queue';
-import { listMeasurements, ofRecord } from '@/server/features/measurements/measurement.service';
 import { listLenses } from '@/server/features/lenses/lens.service';
-import { listPatientsById } from '@/server/features/patients/patient-record.service';
-import { outOfDateReasons, type PresentFacts } from '@/server/features/plans/out-of-date';
-import { readFrozen } from '@/server/features/plans/signed-snapshot';
+import { ofRecord } from '@/server/features/measurements/measurement.service';
+import { reasonsSinceSigning, type PresentFacts } from '@/server/features/plans/out-of-date';
+import { findChecks, flagsOf } from './eye-checks.service';
 import { findPlanStates, type PlanState } from './plan-state.repository';
-import { listSettlements, type Settlement } from './settlement.repository';
 
 export interface EyeStanding {
   eye: Eye;
@@ -30,48 +27,24 @@ export async function findStandings(
   { eyes, today }: StandingRequest,
   transaction?: Transaction,
 ): Promise<EyeStanding[]> {
-  const ids = eyes.map(({ id }) => id);
-  const [measurements, settlements, plans, patients] = await Promise.all([
-    listMeasurements(eyes, transaction),
-    listSettlements(ids, transaction),
-    findPlanStates(ids, transaction),
-    listPatientsById([...new Set(eyes.map(({ patientId }) => patientId))], transaction),
+  const [found, plans] = await Promise.all([
+    findChecks(eyes, transaction),
+    findPlanStates(
+      eyes.map(({ id }) => id),
+      transaction,
+    ),
   ]);
   // Only a signature has to be compared with the catalogue.
   const isAnySigned = [...plans.values()].some(({ signed }) => signed);
   const lenses = isAnySigned ? await listLenses(transaction) : [];
-  return eyes.map((eye) => {
-    const fellow = eyes.find(({ patientId, side }) => patientId === eye.patientId && side !== eye.side);
-    const measurement = ofRecord(measurements.get(eye.id));
-    const fellowMeasurement = ofRecord(fellow && measurements.get(fellow.id));
-    const patient = patients.find(({ id }) => id === eye.patientId);
-    if (!patient) throw new Error('An eye without a patient');
-    const question = { fellowMeasurement, eye, fellowEye: fellow ?? null, patient, today };
-    const raised = measurement ? checkMeasurements({ measurement, ...question }) : [];
-    const settled = settlements.filter(({ eyeId }) => eyeId === eye.id);
-    const flags = raised.map((flag) => ({ ...flag, settlement: settlementOf(flag, measurement, settled) }));
-    const present = { patient, eye, measurements: measurements.get(eye.id) ?? [], lenses };
+  return found.map((checks) => {
+    const { eye, patient, measurements } = checks;
+    const measurement = ofRecord(measurements);
+    const flags = flagsOf(checks, measurement, today);
+    const present = { patient, eye, measurements, lenses };
     const stage = stageOf({ measurement, flags, plan: plans.get(eye.id), present });
-    return {
-      eye,
-      measurements: measurements.get(eye.id) ?? [],
-      flags,
-      stage,
-      waitsFor: waitsFor(stage, flags),
-    };
+    return { eye, measurements, flags, stage, waitsFor: waitsFor(stage, flags) };
   });
-}
-
-/** A settlement counts for the measurement that it was given for, and no other. */
-function settlementOf(
-  { ruleId }: Pick<Flag, 'ruleId'>,
-  measurement: Measurement | null,
-  settlements: readonly Settlement[],
-): Flag['settlement'] {
-  const found = settlements.find(
-    (one) => one.ruleId === ruleId && one.measurementId === (measurement?.id ?? null),
-  );
-  return found ? { by: found.by, at: found.at, reason: found.reason } : null;
 }
 
 const isOpenStop = ({ severity, settlement }: Flag): boolean => severity === 'stop' && settlement === null;
@@ -85,7 +58,7 @@ interface StageFacts {
 
 function stageOf({ measurement, flags, plan, present }: StageFacts): EyeStage {
   if (plan?.signed) {
-    return outOfDateReasons(readFrozen(plan.signed), present).length === 0 ? 'signed' : 'out-of-date';
+    return reasonsSinceSigning(plan.signed, present).length === 0 ? 'signed' : 'out-of-date';
   }
   if (!measurement) return 'measure';
   if (flags.some(isOpenStop)) return 'check';

@@ -13,23 +13,18 @@ import { columnList, selectRows } from '@/server/db/select-rows';
 
 export type LensFacts = Omit<LensInput, 'constants'>;
 
-/** Every model with the constants in use, by name. */
+/** Every model with the constants in use, by name. One row each: a catalogue has ten times as many constants. */
 export async function listAllLenses(transaction?: Transaction): Promise<Lens[]> {
-  const [rows, constants] = await Promise.all([
-    selectRows<StoredLens>(LensModel, {
-      sql: `SELECT ${columnList(LensModel, LENS_ATTRIBUTES)} FROM lenses ORDER BY name, id`,
-      bind: [],
-      transaction,
-    }),
-    selectRows<StoredConstant>(LensConstantModel, {
-      sql: `SELECT ${columnList(LensConstantModel, CONSTANT_ATTRIBUTES)} FROM lens_constants WHERE replaced_at IS NULL`,
-      bind: [],
-      transaction,
-    }),
-  ]);
-  const byLens = new Map<string, StoredConstant[]>(rows.map(({ id }) => [id, []]));
-  for (const constant of constants) byLens.get(constant.lensId)?.push(constant);
-  return rows.map((row) => toLens(readLens(row), (byLens.get(row.id) ?? []).map(readConstant)));
+  const constants = `SELECT json_group_array(json_object('formula', c.formula, 'origin', c.origin,
+      'values', json(c."values"), 'source', c.source, 'dated', c.dated))
+    FROM lens_constants c WHERE c.lens_id = l.id AND c.replaced_at IS NULL`;
+  const rows = await selectRows<LensRow>(LensModel, {
+    sql: `SELECT ${columnList(LensModel, LENS_ATTRIBUTES, 'l')}, (${constants}) AS constants
+      FROM lenses l ORDER BY l.name, l.id`,
+    bind: [],
+    transaction,
+  });
+  return rows.map(fromRow);
 }
 
 const LENS_ATTRIBUTES = [
@@ -45,33 +40,29 @@ const LENS_ATTRIBUTES = [
   'isDemo',
   'version',
 ] as const;
-const CONSTANT_ATTRIBUTES = ['lensId', 'formula', 'origin', 'values', 'source', 'dated'] as const;
 type LensFields = Pick<LensModel, (typeof LENS_ATTRIBUTES)[number]>;
-type ConstantFields = Pick<LensConstantModel, (typeof CONSTANT_ATTRIBUTES)[number]>;
-/** As the columns hold them. */
-type StoredLens = Omit<LensFields, 'isToric' | 'isRetired' | 'isDemo' | 'powerRanges' | 'cylinderStepsD'> &
+/** As the columns hold it: JSON as text, booleans as numbers. */
+type LensRow = Omit<LensFields, 'isToric' | 'isRetired' | 'isDemo' | 'powerRanges' | 'cylinderStepsD'> &
   Record<'isToric' | 'isRetired' | 'isDemo', 0 | 1> &
-  Record<'powerRanges' | 'cylinderStepsD', string>;
-type StoredConstant = Omit<ConstantFields, 'values'> & { values: string };
+  Record<'powerRanges' | 'cylinderStepsD' | 'constants', string>;
 
-const readLens = (row: StoredLens): LensFields => ({
-  ...row,
-  isToric: row.isToric === 1,
-  isRetired: row.isRetired === 1,
-  isDemo: row.isDemo === 1,
-  powerRanges: JSON.parse(row.powerRanges) as LensFields['powerRanges'],
-  cylinderStepsD: JSON.parse(row.cylinderStepsD) as LensFields['cylinderStepsD'],
-});
-const readConstant = (row: StoredConstant): ConstantFields => ({
-  ...row,
-  values: JSON.parse(row.values) as ConstantFields['values'],
-});
+function fromRow({ constants, ...row }: LensRow): Lens {
+  const fields: LensFields = {
+    ...row,
+    isToric: row.isToric === 1,
+    isRetired: row.isRetired === 1,
+    isDemo: row.isDemo === 1,
+    powerRanges: JSON.parse(row.powerRanges) as Lens['powerRanges'],
+    cylinderStepsD: JSON.parse(row.cylinderStepsD) as number[],
+  };
+  return toLens(fields, JSON.parse(constants) as LensConstant[]);
+}
 
 export async function findLens(id: string, transaction?: Transaction): Promise<Lens | undefined> {
   const row = await LensModel.findByPk(id, { transaction });
   if (!row) return undefined;
   const constants = await LensConstantModel.findAll({ where: { lensId: id, replacedAt: null }, transaction });
-  return toLens(row, constants);
+  return toLens(row, constants.map(toConstant));
 }
 
 export async function addLens(
@@ -138,7 +129,7 @@ export async function listConstantHistory(
   }));
 }
 
-function toLens(row: LensFields, constants: readonly ConstantFields[]): Lens {
+function toLens(row: LensFields, constants: readonly LensConstant[]): Lens {
   const {
     id,
     name,
@@ -160,7 +151,7 @@ function toLens(row: LensFields, constants: readonly ConstantFields[]): Lens {
     design,
     powerRanges,
     cylinderStepsD,
-    constants: constants.map(toConstant).sort(byOriginAndFormula),
+    constants: [...constants].sort(byOriginAndFormula),
     remarks,
     isRetired,
     isDemo,
@@ -168,7 +159,7 @@ function toLens(row: LensFields, constants: readonly ConstantFields[]): Lens {
   };
 }
 
-function toConstant({ formula, origin, values, source, dated }: ConstantFields): LensConstant {
+function toConstant({ formula, origin, values, source, dated }: LensConstantModel): LensConstant {
   return { formula, origin, values, source, dated };
 }
 

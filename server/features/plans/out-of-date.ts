@@ -5,6 +5,7 @@
 import { FORMULA_VERSION } from '@/formulas';
 import type { Eye, Lens, Measurement, Patient, PlanSnapshot } from '@/shared/contract';
 import { canonicalJson } from './canonical-json';
+import { findFrozen, MISMATCH, type StoredText } from './signed-snapshot';
 
 export interface PresentFacts {
   patient: Patient;
@@ -16,6 +17,12 @@ export interface PresentFacts {
 
 const IDENTITY = ['recordNumber', 'familyName', 'givenName', 'birthDate', 'sex'] as const;
 const isSame = (a: unknown, b: unknown): boolean => canonicalJson(a) === canonicalJson(b);
+
+/** The same of a plan as it is stored. */
+export function reasonsSinceSigning(stored: StoredText, present: PresentFacts): string[] {
+  const signed = findFrozen(stored);
+  return signed ? outOfDateReasons(signed, present) : [MISMATCH];
+}
 
 /** In words; empty while everything is as it was signed. */
 export function outOfDateReasons(signed: PlanSnapshot, present: PresentFacts): string[] {

@@ -1,35 +1,40 @@
 /** The choice as a counsellor would say it. */
-import { LENS_KIND_NAMES, type Lens, type PlanChoice } from '@/shared/contract';
+import { LENS_KIND_NAMES, type Lens, type PlanChoice, type Side } from '@/shared/contract';
+import { powerWords, signedD } from '@/shared/clinical/number-words';
 
-const MINUS = '\u2212';
-const signed = (valueD: number, decimals: number): string => {
-  const text = Math.abs(valueD).toFixed(decimals);
-  if (Number(text) === 0) return text;
-  return (valueD < 0 ? MINUS : '+') + text;
-};
-
-const powerText = (powerD: number): string => signed(powerD, Number.isInteger(powerD * 2) ? 1 : 2);
-
-/** What the target means for distance without glasses, in words. */
-function aimWords(targetD: number): string {
-  if (targetD <= -1.5) return 'aimed at near: reading without glasses, glasses for distance';
-  if (targetD <= -0.75) return 'aimed at arm’s length: glasses for far and for small print';
-  if (targetD < -0.3) return 'aimed a little near: distance almost clear';
-  if (targetD <= 0.25) return 'aimed at clear distance; glasses for reading unless the lens gives near';
-  return 'aimed beyond distance';
-}
-
-/** `Monofocal lens Pilot Mono, power +21.5 D; aimed at clear distance … (target −0.25 D)` */
-export function plainWords({
-  choice,
-  lens,
-  targetD,
-}: {
+export interface ChoiceInWords {
+  side: Side;
   choice: PlanChoice | null;
   lens: Pick<Lens, 'name' | 'kind' | 'isToric'> | undefined;
   targetD: number;
-}): string {
-  if (!choice || !lens) return 'No lens chosen yet';
-  const kind = `${LENS_KIND_NAMES[lens.kind]}${lens.isToric ? ' toric' : ''} lens ${lens.name}`;
-  return `${kind}, power ${powerText(choice.powerD)} D; ${aimWords(targetD)} (target ${signed(targetD, 2)} D)`;
 }
+
+/** `Right eye: monofocal lens Pilot Mono, power +21.5 D, aiming at −0.25 D (…)` */
+export function plainWords({ side, choice, lens, targetD }: ChoiceInWords): string {
+  const eye = side === 'right' ? 'Right eye' : 'Left eye';
+  if (!choice || !lens) return `${eye}: no lens chosen yet`;
+  const kind = `${LENS_KIND_NAMES[lens.kind].toLowerCase()}${lens.isToric ? ' toric' : ''} lens ${lens.name}`;
+  return `${eye}: ${kind}, power ${powerWords(choice.powerD)} D, aiming at ${signedD(targetD)} D (${aimWords(targetD)})`;
+}
+
+/** What the target means for seeing without glasses with a lens of one focus; averages, never a promise. */
+function aimWords(targetD: number): string {
+  const band = AIMS.find(({ fromD }) => targetD >= fromD);
+  return band?.words ?? FOR_NEAR;
+}
+
+const FOR_NEAR = 'nearsighted on purpose: made for reading, with glasses for distance';
+const AIMS: readonly { fromD: number; words: string }[] = [
+  { fromD: 0.26, words: 'farsighted: glasses for every distance' },
+  { fromD: 0, words: 'made for clear distance, with glasses for reading' },
+  {
+    fromD: -0.3,
+    words:
+      'slightly nearsighted so that a small miss does not end farsighted; distance clear, with glasses for reading',
+  },
+  { fromD: -0.75, words: 'a little nearsighted: distance almost clear, with glasses for reading' },
+  {
+    fromD: -1.5,
+    words: 'nearsighted on purpose: made for arm’s length, with glasses for far and for small print',
+  },
+];

@@ -1,34 +1,40 @@
 /** The desk of a plan from its facts: for a draft calculated now, for a signed plan as it was frozen. Pure. */
-import type { Flag, Lens, Measurement, ModelCalculation, Plan, PlanDesk } from '@/shared/contract';
+import type { Plan, PlanDesk } from '@/shared/contract';
 import { calculatePlan } from '@/shared/clinical/plan-calculation';
 import { ProblemError } from '@/server/http/problem';
-import { outOfDateReasons } from './out-of-date';
+import { outOfDateReasons, reasonsSinceSigning } from './out-of-date';
+import { blockersOf } from './plan-blockers';
 import type { EyeFacts } from './plan-facts.service';
 import type { StoredPlan } from './plan.repository';
-import { readFrozen } from './signed-snapshot';
+import { digestOf, readFrozen } from './signed-snapshot';
 
 export function deskOf(stored: StoredPlan, facts: EyeFacts): PlanDesk {
-  return stored.snapshot === null ? draftDesk(stored, facts) : signedDesk(stored, facts);
+  const desk = stored.snapshot === null ? draftDesk(stored, facts) : signedDesk(stored, facts);
+  return { ...desk, shownDigest: shownDigestOf(desk) };
 }
 
-export function toPlan(
-  stored: StoredPlan,
-  { patient, eye }: Pick<EyeFacts, 'patient' | 'eye'>,
-  reasons: string[],
-): Plan {
-  const { eyeId: _eyeId, snapshot: _snapshot, actedAt: _actedAt, ...plan } = stored;
-  return { ...plan, patientId: patient.id, side: eye.side, outOfDateReasons: reasons };
+type Shown = Omit<PlanDesk, 'shownDigest'>;
+
+/** Of everything that a signature would freeze: whoever signs proves to have seen it. */
+function shownDigestOf({ patient, eye, measurement, calculation }: Shown): string {
+  return digestOf(JSON.stringify([patient, eye, measurement, calculation]));
 }
 
 /** A replaced plan is history: it is not called out of date. */
 export function reasonsOf(stored: StoredPlan, facts: EyeFacts): string[] {
-  return stored.status === 'signed' ? outOfDateReasons(readFrozen(stored), facts) : [];
+  return stored.status === 'signed' ? reasonsSinceSigning(stored, facts) : [];
 }
 
-function signedDesk(stored: StoredPlan, facts: EyeFacts): PlanDesk {
+function toPlan(stored: StoredPlan, { patient, eye }: EyeFacts, outOfDateReasons: string[]): Plan {
+  const { eyeId: _eyeId, snapshot: _snapshot, actedAt: _actedAt, ...plan } = stored;
+  return { ...plan, patientId: patient.id, side: eye.side, outOfDateReasons };
+}
+
+function signedDesk(stored: StoredPlan, facts: EyeFacts): Shown {
   const frozen = readFrozen(stored);
+  const reasons = stored.status === 'signed' ? outOfDateReasons(frozen, facts) : [];
   return {
-    plan: toPlan(stored, facts, reasonsOf(stored, facts)),
+    plan: toPlan(stored, facts, reasons),
     patient: frozen.patient,
     eye: frozen.eye,
     measurement: frozen.measurement,
@@ -39,62 +45,22 @@ function signedDesk(stored: StoredPlan, facts: EyeFacts): PlanDesk {
   };
 }
 
-function draftDesk(stored: StoredPlan, facts: EyeFacts): PlanDesk {
+function draftDesk(stored: StoredPlan, facts: EyeFacts): Shown {
   const { input, choice } = stored;
-  const measurement = facts.measurements.find(({ id }) => id === input.measurementId);
+  const { patient, eye, measurements } = facts;
+  const measurement = measurements.find(({ id }) => id === input.measurementId);
   if (!measurement) throw new ProblemError('conflict', 'The measurement of this draft is not there any more');
   const lenses = input.lensIds.flatMap((id) => facts.lenses.filter((lens) => lens.id === id));
-  const calculation = calculatePlan({
-    eye: facts.eye,
-    measurement,
-    lenses,
-    input,
-    flags: facts.flags,
-    choice,
-  });
+  const flags = facts.flagsOf(measurement);
+  const calculation = calculatePlan({ eye, measurement, lenses, input, flags, choice });
   return {
     plan: toPlan(stored, facts, []),
-    patient: facts.patient,
-    eye: facts.eye,
+    patient,
+    eye,
     measurement,
-    measurements: facts.measurements,
+    measurements,
     lenses: facts.lenses.filter((lens) => !lens.isRetired || input.lensIds.includes(lens.id)),
     calculation,
-    blockers: blockersOf({ stored, measurement, models: calculation.models, lenses, flags: facts.flags }),
+    blockers: blockersOf({ choice, measurement, lenses, calculation }),
   };
-}
-
-interface BlockerFacts {
-  stored: StoredPlan;
-  measurement: Measurement;
-  models: readonly ModelCalculation[];
-  lenses: readonly Lens[];
-  flags: readonly Flag[];
-}
-
-/** What stands between the draft and a signature, in words. */
-function blockersOf({ stored, measurement, models, lenses, flags }: BlockerFacts): string[] {
-  const openStops = flags.filter(({ severity, settlement }) => severity === 'stop' && settlement === null);
-  return [
-    ...choiceBlockers(stored, models, lenses),
-    ...(measurement.isOfRecord
-      ? []
-      : ['The measurement is not the newest of this eye: choose the one of record']),
-    ...openStops.map(({ message }) => `Settle the stop: ${message}`),
-  ];
-}
-
-function choiceBlockers(
-  { choice }: StoredPlan,
-  models: readonly ModelCalculation[],
-  lenses: readonly Lens[],
-): string[] {
-  if (!choice) return ['Choose a lens and its power'];
-  const model = models.find(({ lensId }) => lensId === choice.lensId);
-  const hasResult = model?.candidates.some(({ powerD }) => powerD === choice.powerD) ?? false;
-  const isRetired = lenses.find(({ id }) => id === choice.lensId)?.isRetired ?? true;
-  return [
-    ...(hasResult ? [] : ['No formula gives a result for the chosen lens and power']),
-    ...(isRetired ? ['The chosen lens model is retired'] : []),
-  ];
 }

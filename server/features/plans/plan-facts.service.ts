@@ -8,10 +8,9 @@ import {
   type Patient,
 } from '@/shared/contract';
 import type { Transaction } from '@/server/db/write-queue';
-import { findEyeById, getEyes, listEyesOfPatients } from '@/server/features/eyes/eye-record.service';
-import { findStandings } from '@/server/features/eyes/eye-standing.service';
+import { findChecks, flagsOf, type EyeChecks } from '@/server/features/eyes/eye-checks.service';
+import { findPairOf, listPairsOf } from '@/server/features/eyes/eye-record.service';
 import { listLenses } from '@/server/features/lenses/lens.service';
-import { getPatient, listPatientsById } from '@/server/features/patients/patient-record.service';
 import { ProblemError } from '@/server/http/problem';
 
 export interface EyeFacts {
@@ -19,37 +18,35 @@ export interface EyeFacts {
   eye: Eye;
   /** Newest first. */
   measurements: Measurement[];
-  flags: Flag[];
   lenses: Lens[];
+  /** Flags that one of the measurements raises today. */
+  flagsOf: (measurement: Measurement) => Flag[];
 }
 
 /** Everything about one eye that a plan needs. `at` is the ISO moment that counts as now. */
 export async function factsOfEye(eyeId: string, at: string, transaction?: Transaction): Promise<EyeFacts> {
-  const found = await findEyeById(eyeId, transaction);
-  if (!found) throw new ProblemError('not-found');
-  const { eye, fellowEye } = await getEyes(found.patientId, found.side, transaction);
-  const request = { eyes: [eye, fellowEye], today: localDateOf(new Date(at)) };
-  const [patient, [standing], lenses] = await Promise.all([
-    getPatient(eye.patientId, transaction),
-    findStandings(request, transaction),
-    listLenses(transaction),
-  ]);
-  return { patient, eye, measurements: standing?.measurements ?? [], flags: standing?.flags ?? [], lenses };
+  const [pair, lenses] = await Promise.all([findPairOf(eyeId, transaction), listLenses(transaction)]);
+  const found = await findChecks(pair, transaction);
+  const checks = found.find(({ eye }) => eye.id === eyeId);
+  if (!checks) throw new ProblemError('not-found');
+  return toFacts(checks, lenses, at);
 }
 
 /** The same for a page of plans, by the eye's id, in a handful of reads. */
 export async function factsOfEyes(eyeIds: readonly string[], at: string): Promise<Map<string, EyeFacts>> {
-  const wanted = await Promise.all(eyeIds.map((id) => findEyeById(id)));
-  const patientIds = [...new Set(wanted.flatMap((eye) => (eye ? [eye.patientId] : [])))];
-  const [patients, eyes, lenses] = await Promise.all([
-    listPatientsById(patientIds),
-    listEyesOfPatients(patientIds),
-    listLenses(),
-  ]);
-  const standings = await findStandings({ eyes, today: localDateOf(new Date(at)) });
-  const entries = standings.flatMap(({ eye, measurements, flags }) => {
-    const patient = patients.find(({ id }) => id === eye.patientId);
-    return patient ? [[eye.id, { patient, eye, measurements, flags, lenses }] as const] : [];
-  });
-  return new Map(entries);
+  const [pairs, lenses] = await Promise.all([listPairsOf(eyeIds), listLenses()]);
+  const found = await findChecks(pairs);
+  return new Map(found.map((checks) => [checks.eye.id, toFacts(checks, lenses, at)]));
+}
+
+function toFacts(checks: EyeChecks, lenses: Lens[], at: string): EyeFacts {
+  const { patient, eye, measurements } = checks;
+  const today = localDateOf(new Date(at));
+  return {
+    patient,
+    eye,
+    measurements,
+    lenses,
+    flagsOf: (measurement) => flagsOf(checks, measurement, today),
+  };
 }

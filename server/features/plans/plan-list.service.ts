@@ -2,14 +2,13 @@
 import { z } from 'zod';
 import { formatPatientName, hasPermission, type Page, type Plan, type PlanListItem } from '@/shared/contract';
 import type { Act, Actor } from '@/server/act';
-import { listEyesOfPatients } from '@/server/features/eyes/eye-record.service';
 import { findPatientIds } from '@/server/features/patients/patient-record.service';
 import { decodeCursor, toPage } from '@/server/http/paging';
-import { plainWords } from './plain-words';
+import { plainWords, type ChoiceInWords } from './plain-words';
 import { reasonsOf } from './plan-desk';
 import { factsOfEye, factsOfEyes, type EyeFacts } from './plan-facts.service';
 import { listPlansAfter, listPlansOfEye, type StoredPlan } from './plan.repository';
-import { readFrozen } from './signed-snapshot';
+import { findFrozen, MISMATCH } from './signed-snapshot';
 
 export interface PlanListQuery {
   status?: Plan['status'];
@@ -30,10 +29,10 @@ export async function listPlans(
   const allowed = hasPermission(actor.roles, 'plan.write')
     ? statuses
     : statuses.filter((status) => READABLE.includes(status));
-  const eyeIds = query.search ? await eyesOf(query.search) : undefined;
+  const patientIds = query.search ? await findPatientIds(query.search) : undefined;
   const page = await toPage({
     limit: query.limit,
-    fetch: (count) => listPlansAfter({ statuses: allowed, eyeIds, after: afterId, count }),
+    fetch: (count) => listPlansAfter({ statuses: allowed, patientIds, after: afterId, count }),
     toItem: (plan) => plan,
     cursorOf: ({ actedAt, id }) => [actedAt, id],
   });
@@ -63,39 +62,48 @@ async function withWords(plans: readonly StoredPlan[], at: string): Promise<Plan
   });
 }
 
-/** A signed plan is told from what was frozen, a draft from what is known now. */
-function toldFrom(plan: StoredPlan, facts: EyeFacts) {
-  if (plan.snapshot === null) return { patient: facts.patient, lenses: facts.lenses, chance: null };
-  const { patient, lenses, chosenCandidate } = readFrozen(plan);
-  return { patient, lenses, chance: chosenCandidate.landing.chance };
-}
-
+/** Under the name of today, so that it is found; what was chosen and how sure it was, as it was signed. */
 function toItem(plan: StoredPlan, facts: EyeFacts): PlanListItem {
-  const { patient, lenses, chance } = toldFrom(plan, facts);
-  const { id, sequence, status, choice, input, signedBy, signedAt } = plan;
-  const lens = lenses.find((candidate) => candidate.id === choice?.lensId);
+  const { patient, eye } = facts;
+  const { id, sequence, status, input, signedBy, signedAt } = plan;
   return {
     id,
-    patientId: facts.patient.id,
+    patientId: patient.id,
     patientName: formatPatientName(patient),
     recordNumber: patient.recordNumber,
     birthDate: patient.birthDate,
-    side: facts.eye.side,
+    side: eye.side,
     sequence,
     status,
-    lensName: lens?.name ?? null,
-    powerD: choice?.powerD ?? null,
     targetD: input.targetD,
-    chance,
     toleranceD: input.toleranceD,
-    plainWords: plainWords({ choice, lens, targetD: input.targetD }),
+    ...choiceOf(plan, facts),
     signedBy,
     signedAt,
     outOfDateReasons: reasonsOf(plan, facts),
   };
 }
 
-async function eyesOf(search: string): Promise<string[]> {
-  const eyes = await listEyesOfPatients(await findPatientIds(search));
-  return eyes.map(({ id }) => id);
+type Chosen = Pick<PlanListItem, 'lensName' | 'powerD' | 'chance' | 'plainWords'>;
+
+const WITHHELD: Chosen = { lensName: null, powerD: null, chance: null, plainWords: MISMATCH };
+
+function choiceOf(plan: StoredPlan, { eye, lenses }: EyeFacts): Chosen {
+  const { choice, input, snapshot } = plan;
+  if (snapshot === null) {
+    const lens = lenses.find(({ id }) => id === choice?.lensId);
+    return inWords({ side: eye.side, choice, lens, targetD: input.targetD }, null);
+  }
+  const frozen = findFrozen(plan);
+  if (!frozen) return WITHHELD;
+  const lens = frozen.lenses.find(({ id }) => id === frozen.choice.lensId);
+  const words = { side: eye.side, choice: frozen.choice, lens, targetD: frozen.input.targetD };
+  return inWords(words, frozen.chosenCandidate.landing.chance);
 }
+
+const inWords = (words: ChoiceInWords, chance: number | null): Chosen => ({
+  lensName: words.lens?.name ?? null,
+  powerD: words.choice?.powerD ?? null,
+  chance,
+  plainWords: plainWords(words),
+});

@@ -1,7 +1,7 @@
-import { Op, type Transaction, type WhereOptions } from 'sequelize';
+import type { Transaction } from 'sequelize';
 import type { Plan, PlanChoice, PlanInput } from '@/shared/contract';
-import { AccountModel } from '@/server/db/models/account';
 import { PlanModel } from '@/server/db/models/plan';
+import { asList, columnList, IN_FIRST, selectRows } from '@/server/db/select-rows';
 
 /** A plan as it is stored, before it is known whose eye it is for and whether it still fits. */
 export interface StoredPlan extends Omit<Plan, 'patientId' | 'side' | 'outOfDateReasons'> {
@@ -28,13 +28,12 @@ export async function addDraft({ at, ...draft }: NewDraft, transaction: Transact
 }
 
 export async function findPlan(id: string, transaction?: Transaction): Promise<StoredPlan | undefined> {
-  const row = await PlanModel.findByPk(id, { transaction });
-  return row ? (await toStored([row], transaction))[0] : undefined;
+  const [plan] = await selectPlans('p.id = $1', [id], transaction);
+  return plan;
 }
 
 export async function listPlansOfEye(eyeId: string, transaction?: Transaction): Promise<StoredPlan[]> {
-  const rows = await PlanModel.findAll({ where: { eyeId }, order: [['sequence', 'DESC']], transaction });
-  return toStored(rows, transaction);
+  return selectPlans('p.eye_id = $1 ORDER BY p.sequence DESC', [eyeId], transaction);
 }
 
 export interface DraftChange {
@@ -78,54 +77,76 @@ export async function storeSignature(
 
 export interface PlanFilter {
   statuses: readonly Plan['status'][];
-  /** Only plans of these eyes; undefined for all. */
-  eyeIds: readonly string[] | undefined;
+  /** Only plans of these patients; undefined for all. */
+  patientIds: readonly string[] | undefined;
   /** Moment and id of the last plan of the page before. */
   after: readonly [string, string] | undefined;
   count: number;
 }
 
-/** Newest act first. */
-export async function listPlansAfter({ statuses, eyeIds, after, count }: PlanFilter): Promise<StoredPlan[]> {
-  const beyond: WhereOptions = after
-    ? { [Op.or]: [{ updatedAt: { [Op.lt]: after[0] } }, { updatedAt: after[0], id: { [Op.lt]: after[1] } }] }
-    : {};
-  const ofEyes = eyeIds ? { eyeId: [...eyeIds] } : {};
-  const rows = await PlanModel.findAll({
-    where: { [Op.and]: [{ status: [...statuses], ...ofEyes }, beyond] },
-    order: [
-      ['updatedAt', 'DESC'],
-      ['id', 'DESC'],
-    ],
-    limit: count,
-  });
-  return toStored(rows);
+/** Newest act first. The page is found by ids, so that no signed text is sorted. */
+export async function listPlansAfter({
+  statuses,
+  patientIds,
+  after,
+  count,
+}: PlanFilter): Promise<StoredPlan[]> {
+  const page = `SELECT id FROM plans
+    WHERE status ${IN_FIRST}
+      AND ($2 IS NULL OR eye_id IN
+        (SELECT id FROM eyes WHERE patient_id IN (SELECT value FROM json_each($2))))
+      AND ($3 IS NULL OR updated_at < $3 OR (updated_at = $3 AND id < $4))
+    ORDER BY updated_at DESC, id DESC LIMIT $5`;
+  return selectPlans(`p.id IN (${page}) ORDER BY p.updated_at DESC, p.id DESC`, [
+    asList(statuses),
+    patientIds ? asList(patientIds) : null,
+    after?.[0] ?? null,
+    after?.[1] ?? null,
+    count,
+  ]);
 }
 
-async function toStored(rows: readonly PlanModel[], transaction?: Transaction): Promise<StoredPlan[]> {
-  const ids = [
-    ...new Set(rows.flatMap(({ createdBy, signedBy }) => [createdBy, ...(signedBy ? [signedBy] : [])])),
-  ];
-  const accounts =
-    ids.length > 0
-      ? await AccountModel.findAll({ attributes: ['id', 'displayName'], where: { id: ids }, transaction })
-      : [];
-  const nameOf = (id: string | null) =>
-    id === null ? null : (accounts.find((account) => account.id === id)?.displayName ?? '—');
-  return rows.map((row) => ({
-    id: row.id,
-    eyeId: row.eyeId,
-    sequence: row.sequence,
-    status: row.status,
-    input: row.input,
-    choice: row.choice,
-    createdBy: nameOf(row.createdBy) ?? '—',
-    createdAt: row.createdAt,
-    signedBy: nameOf(row.signedBy),
-    signedAt: row.signedAt,
-    digest: row.digest,
-    snapshot: row.snapshot,
-    actedAt: row.updatedAt,
-    version: row.version ?? 0,
+export async function countPlans(statuses: readonly Plan['status'][]): Promise<number> {
+  const sql = `SELECT count(*) AS total FROM plans WHERE status ${IN_FIRST}`;
+  const [row] = await selectRows<{ total: number }>(PlanModel, {
+    sql,
+    bind: [asList(statuses)],
+    transaction: undefined,
+  });
+  return row?.total ?? 0;
+}
+
+const STORED_ATTRIBUTES = [
+  'id',
+  'eyeId',
+  'sequence',
+  'status',
+  'input',
+  'choice',
+  'createdAt',
+  'signedAt',
+  'digest',
+  'snapshot',
+  'version',
+] as const;
+
+/** As the columns hold it, with the names of those who made and signed it. */
+type PlanRow = Omit<StoredPlan, 'input' | 'choice'> & { input: string; choice: string | null };
+
+async function selectPlans(
+  condition: string,
+  bind: readonly (string | number | null)[],
+  transaction?: Transaction,
+): Promise<StoredPlan[]> {
+  const sql = `SELECT ${columnList(PlanModel, STORED_ATTRIBUTES, 'p')}, p.updated_at AS actedAt,
+       author.display_name AS createdBy, signer.display_name AS signedBy
+     FROM plans p JOIN accounts author ON author.id = p.created_by
+       LEFT JOIN accounts signer ON signer.id = p.signed_by
+     WHERE ${condition}`;
+  const rows = await selectRows<PlanRow>(PlanModel, { sql, bind, transaction });
+  return rows.map(({ input, choice, ...row }) => ({
+    ...row,
+    input: JSON.parse(input) as PlanInput,
+    choice: choice === null ? null : (JSON.parse(choice) as PlanChoice),
   }));
 }

@@ -48,7 +48,8 @@ function readingRoutes(deps: Deps): Route[] {
       summary: 'A plan with its calculation; a signed one as it was frozen',
       params: byId,
       reply: planDeskSchema,
-      handle: ({ params: { id }, write }) => write(async (act) => versioned(await viewPlan(act, id))),
+      handle: async ({ params: { id }, actor, requestId }) =>
+        versioned(await viewPlan(deps, { actor, requestId }, id)),
     }),
     defineRoute({
       method: 'get',
@@ -58,9 +59,8 @@ function readingRoutes(deps: Deps): Route[] {
       params: byId,
       query: z.object({ paper: z.enum(['a4', 'letter']).optional() }),
       reply: 'application/pdf',
-      handle: async ({ params: { id }, query, write }) => {
-        const sheet = await write(async (act) => json(await viewForPrint(act, id)));
-        const printed = sheet.body as Awaited<ReturnType<typeof viewForPrint>>;
+      handle: async ({ params: { id }, query, actor, requestId }) => {
+        const printed = await viewForPrint(deps, { actor, requestId }, id);
         const { patient, sequence } = printed.snapshot;
         const fileName = `plan-${patient.recordNumber}-${printed.plan.side}-${sequence}.pdf`;
         return file({

@@ -9,7 +9,8 @@ import {
   type SignPlan,
 } from '@/shared/contract';
 import type { Act } from '@/server/act';
-import { recordAudit } from '@/server/audit/writer';
+import { recordAudit, type AuditNote } from '@/server/audit/writer';
+import { recordView, type ViewDeps, type Viewer } from '@/server/audit/view-writer';
 import { getEyes } from '@/server/features/eyes/eye-record.service';
 import { getPractice } from '@/server/features/practice/practice.service';
 import { requireVersion } from '@/server/http/etag';
@@ -52,15 +53,11 @@ export async function startDraft(
   return (await findOpen(act, id)).desk;
 }
 
-/** Reading a plan; drafts are the surgeon's alone. */
-export async function viewPlan(act: Act, id: string): Promise<PlanDesk> {
-  const { stored, facts, desk } = await findOpen(act, id);
-  await audit(act, 'plan.view', {
-    id,
-    facts,
-    version: stored.version,
-    detail: { sequence: stored.sequence, status: stored.status },
-  });
+/** Reading a plan; drafts are the surgeon's alone. Nothing is answered before the view is in the trail. */
+export async function viewPlan(deps: ViewDeps, viewer: Viewer, id: string): Promise<PlanDesk> {
+  const { stored, facts, desk } = await findOpen({ actor: viewer.actor, at: nowOf(deps) }, id);
+  const detail = { sequence: stored.sequence, status: stored.status };
+  await recordView(deps, viewer, noteOf('plan.view', { id, facts, version: stored.version, detail }));
   return desk;
 }
 
@@ -108,6 +105,8 @@ export async function signPlan(
 ): Promise<PlanDesk> {
   const { stored, facts, desk } = await findDraft(act, id);
   requireVersion(signature.version, stored.version, desk);
+  if (signature.shownDigest !== desk.shownDigest)
+    throw new ProblemError('changed-meanwhile', CHANGED_SINCE_SHOWN, { current: desk });
   checkSignature(desk, signature);
   const frozen = freeze(await snapshotOf(act, desk, signature.acknowledgedRuleIds));
   await storeSignature(
@@ -126,23 +125,29 @@ export async function signPlan(
 }
 
 /** What the sheet prints; asking for it is noted. */
-export async function viewForPrint(act: Act, id: string) {
-  const { stored, facts, desk } = await findOpen(act, id);
+export async function viewForPrint(deps: ViewDeps, viewer: Viewer, id: string) {
+  const { stored, facts, desk } = await findOpen({ actor: viewer.actor, at: nowOf(deps) }, id);
   if (stored.snapshot === null) throw new ProblemError('conflict', 'Only a signed plan has a sheet');
-  await audit(act, 'plan.print', {
-    id,
-    facts,
-    version: stored.version,
-    detail: { sequence: stored.sequence, digest: stored.digest },
-  });
-  return { snapshot: readFrozen(stored), digest: stored.digest ?? '', plan: desk.plan };
+  const { sequence, digest } = stored;
+  const detail = { sequence, digest, reasons: desk.plan.outOfDateReasons };
+  await recordView(deps, viewer, noteOf('plan.print', { id, facts, version: stored.version, detail }));
+  return { snapshot: readFrozen(stored), digest: digest ?? '', plan: desk.plan };
 }
 
-async function findOpen(act: Act, id: string): Promise<Found> {
-  const stored = await findPlan(id, act.transaction);
-  const maySeeDrafts = hasPermission(act.actor.roles, 'plan.write');
+/** Somebody reads, inside an act or outside of one. */
+interface Reading {
+  actor: Pick<Act['actor'], 'roles'>;
+  at: string;
+  transaction?: Act['transaction'];
+}
+
+const nowOf = ({ clock }: ViewDeps): string => clock.now().toISOString();
+
+async function findOpen({ actor, at, transaction }: Reading, id: string): Promise<Found> {
+  const stored = await findPlan(id, transaction);
+  const maySeeDrafts = hasPermission(actor.roles, 'plan.write');
   if (!stored || (stored.snapshot === null && !maySeeDrafts)) throw new ProblemError('not-found');
-  const facts = await factsOfEye(stored.eyeId, act.at, act.transaction);
+  const facts = await factsOfEye(stored.eyeId, at, transaction);
   return { stored, facts, desk: deskOf(stored, facts) };
 }
 
@@ -197,6 +202,9 @@ function checkSignature(
   }
 }
 
+const CHANGED_SINCE_SHOWN =
+  'The patient, the eye, the constants or the flags changed since this plan was shown: look at it again before you sign';
+
 async function snapshotOf(
   act: Act,
   { plan, patient, eye, measurement, lenses, calculation }: PlanDesk,
@@ -236,7 +244,11 @@ interface AuditFacts {
   detail: Record<string, unknown>;
 }
 
-async function audit(act: Act, action: string, { id, facts, version, detail }: AuditFacts): Promise<void> {
-  const about = { noun: 'plan', nounId: id, patientId: facts.patient.id, version };
-  await recordAudit(act, { action, ...about, detail: { side: facts.eye.side, ...detail } });
+function noteOf(action: string, { id, facts, version, detail }: AuditFacts): AuditNote {
+  const { patient, eye } = facts;
+  const about = { noun: 'plan', nounId: id, patientId: patient.id, version };
+  return { action, ...about, detail: { side: eye.side, ...detail } };
 }
+
+const audit = (act: Act, action: string, facts: AuditFacts): Promise<void> =>
+  recordAudit(act, noteOf(action, facts));

@@ -50,7 +50,7 @@ export function useSignPlan(desk: PlanDesk) {
     mutationFn: (signature: Signature) =>
       call(paths.planSign(desk.plan.id), planDeskSchema, {
         method: 'POST',
-        body: { ...signature, version: desk.plan.version },
+        body: { ...signature, version: desk.plan.version, shownDigest: desk.shownDigest },
       }),
     onSuccess: keepDesk,
   });
