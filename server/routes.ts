@@ -18,7 +18,7 @@ export function allRoutes(deps: Deps): Route[] {
   return [
     ...practiceRoutes(deps),
     ...authRoutes(deps),
-    ...homeRoutes(),
+    ...homeRoutes(deps),
     ...accountRoutes(deps),
     ...patientRoutes(deps),
     ...eyeRoutes(),

@@ -1,8 +1,10 @@
 /**
- * Reads in plain SQL, for what every page asks: building models costs several times the read itself. Columns come
- * as the database holds them: JSON as text, booleans as 0 and 1.
+ * Reads in plain SQL on the driver itself, for what every page asks: building models, and the stack that Sequelize
+ * notes down for each query, cost several times the read. Columns come as the database holds them: JSON as text,
+ * booleans as 0 and 1.
  */
-import { QueryTypes, type ModelStatic, type Model, type Transaction } from 'sequelize';
+import type { Model, ModelStatic, Sequelize, Transaction } from 'sequelize';
+import type sqlite3 from 'sqlite3';
 
 export interface Selection {
   sql: string;
@@ -17,8 +19,19 @@ export async function selectRows<Row>(
   { sql, bind, transaction }: Selection,
 ): Promise<Row[]> {
   if (!sequelize) throw new Error('No database is open');
-  const rows = await sequelize.query(sql, { bind: [...bind], transaction, type: QueryTypes.SELECT });
-  return rows as Row[];
+  const connection = await connectionOf(sequelize, transaction);
+  const values = Object.fromEntries(bind.map((value, index) => [`$${index + 1}`, value]));
+  return new Promise((resolve, reject) => {
+    connection.all<Row>(sql, values, (error, rows) => (error ? reject(error) : resolve(rows)));
+  });
+}
+
+/** That of the transaction, or the one that stays open for reading. */
+function connectionOf(sequelize: Sequelize, transaction: Transaction | undefined): Promise<sqlite3.Database> {
+  const own = (transaction as { connection?: sqlite3.Database } | undefined)?.connection;
+  if (transaction && !own) throw new Error('The transaction has ended');
+  if (own) return Promise.resolve(own);
+  return sequelize.connectionManager.getConnection({ type: 'read' }) as Promise<sqlite3.Database>;
 }
 
 /** `id, patient_id AS patientId`: each attribute under its own name, from its column. */

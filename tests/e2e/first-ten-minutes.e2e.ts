@@ -82,7 +82,7 @@ test('imports a file, plans an eye, signs, prints and reads it', async ({ page }
 
   await test.step('the counsellor reads it in plain words', async () => {
     await signIn(page, 'counsellor', `/plans?search=${record}`);
-    await expect(page.getByText(/Monofocal lens .*power \+\d/)).toBeVisible();
+    await expect(page.getByText(/Right eye: monofocal lens .*power \+\d/)).toBeVisible();
     await page.getByRole('link', { name: /,/ }).first().click();
     await expect(page.getByRole('region', { name: 'Signed choice' })).toContainText('RIGHT EYE');
     await expect(page.getByRole('button', { name: 'Plan this eye again' })).toHaveCount(0);
